@@ -1,0 +1,198 @@
+import {
+  type Branches,
+  equivalentSource,
+  type Knot,
+  kneeIndexOf,
+  loadLineOf,
+  nearestPreferred,
+  nextPreferred,
+  resistanceThrough,
+  type Series,
+  type Stage,
+} from '../core'
+import type { Axis } from './axes'
+import { slopeHandle } from './planePicture'
+
+/** What can be grabbed on the plane. */
+export type HandleId = 'supply' | 'slope' | `knot-${number}`
+
+/** One handle: where it is and what it is called. */
+export type Handle = {
+  readonly id: HandleId
+  readonly name: string
+  readonly tone: 'circuit' | 'lamp'
+  readonly x: number
+  readonly y: number
+}
+
+/** What a move of a handle changes. SI values. */
+export type Edit =
+  | { readonly kind: 'supply'; readonly voltage: number }
+  | { readonly kind: 'series'; readonly resistance: number }
+  | { readonly kind: 'knot'; readonly index: number; readonly knot: Knot }
+
+/** Preferred values that resistor and capacitor keep to, or any value. */
+export type PartChoice = 'any' | Series
+
+/** The axes handles live on. */
+export type HandleSetting = {
+  readonly stage: Stage
+  readonly path: Branches
+  readonly x: Axis
+  readonly y: Axis
+  readonly choice: PartChoice
+}
+
+/** Index of a knot's handle; −1 for the load line's. */
+export const knotOf = (id: HandleId): number => (id.startsWith('knot-') ? Number(id.slice(5)) : -1)
+
+/** What a knot is called: knee and valley by name, the others by number. */
+export function knotName(knots: readonly Knot[], index: number): string {
+  const knee = kneeIndexOf(knots)
+  if (index === knee) return 'Knee'
+  if (knee !== null && index > knee) {
+    const valley = knots.findIndex(
+      (knot, k) => k > knee && (knots[k + 1]?.voltage ?? Number.POSITIVE_INFINITY) > knot.voltage,
+    )
+    if (index === valley) return 'Valley'
+  }
+  return `Knot ${index + 1}`
+}
+
+/** All handles in sight: supply end, slope, and each knot but the first, which stays at nothing. */
+export function handlesOf({ stage, path, x, y }: HandleSetting): Handle[] {
+  const line = loadLineOf(stage)
+  const slope = slopeHandle(line, x, y)
+  const handles: Handle[] = [
+    {
+      id: 'supply',
+      name: 'Supply end of the load line',
+      tone: 'circuit',
+      x: x.range[0],
+      y: y.place(equivalentSource(line).voltage),
+    },
+    { id: 'slope', name: 'Slope of the load line', tone: 'circuit', x: slope.x, y: slope.y },
+  ]
+  for (let k = 1; k < path.current.length; k++) {
+    handles.push({
+      id: `knot-${k}`,
+      name: knotName(stage.lamp.knots, k),
+      tone: 'lamp',
+      x: x.place(path.current[k] ?? 0),
+      y: y.place(path.level[k] ?? 0),
+    })
+  }
+  const [left, right] = x.range
+  const [floor, top] = y.range
+  return handles.filter(
+    (handle) =>
+      handle.x >= left - 1 && handle.x <= right + 1 && handle.y <= floor + 1 && handle.y >= top - 1,
+  )
+}
+
+/** Rounds to the nearest 1, 2 or 5 of a power of ten that is no more than `step`. */
+export function tidy(value: number, step: number): number {
+  const power = Math.floor(Math.log10(step))
+  const lead = step / 10 ** power
+  const unit = lead >= 5 ? 5 : lead >= 2 ? 2 : 1
+  const count = Math.round(value / (unit * 10 ** power))
+  return Number(`${count * unit}e${power}`)
+}
+
+const toFigures = (value: number, figures: number) => Number(value.toPrecision(figures))
+
+/** What a handle means where it is put: `at` in px on the plane. Null where it cannot go. */
+export function placeHandle(
+  setting: HandleSetting,
+  id: HandleId,
+  at: { readonly x: number; readonly y: number },
+): Edit | null {
+  const { stage, x, y, choice } = setting
+  const line = loadLineOf(stage)
+  const pixel = Math.abs(y.value(0) - y.value(1))
+  if (id === 'supply') {
+    const open = Math.max(0, y.value(at.y))
+    const voltage = tidy(open * (1 + line.resistance * line.leakage), pixel)
+    return { kind: 'supply', voltage: Math.min(20e3, Math.max(0, voltage)) }
+  }
+  const current = x.value(Math.max(x.range[0] + 0.5, Math.min(x.range[1], at.x)))
+  if (id === 'slope') {
+    const { level } = slopeHandle(line, x, y)
+    return seriesThrough(stage, level, current, choice)
+  }
+  const index = knotOf(id)
+  const tidyCurrent = toFigures(current, 3)
+  const level = Math.max(0, y.value(at.y))
+  const voltage = Math.max(0, tidy(level - stage.leadResistance * tidyCurrent, pixel))
+  return { kind: 'knot', index, knot: { current: tidyCurrent, voltage } }
+}
+
+/** The series resistance that takes the load line through a point of the plane, kept to preferred values. */
+export function seriesThrough(
+  stage: Stage,
+  level: number,
+  current: number,
+  choice: PartChoice,
+): Edit | null {
+  const leakage = 1 / stage.leakageResistance
+  const total = resistanceThrough(stage.supplyVoltage, leakage, level, current)
+  const series = total - stage.sourceResistance
+  if (!(series > 0 && Number.isFinite(series))) return null
+  const kept = Math.min(1e13, Math.max(1, series))
+  const resistance =
+    choice === 'any' ? toFigures(kept, 3) : (nearestPreferred(kept, choice) ?? kept)
+  return { kind: 'series', resistance }
+}
+
+/** One key press: along the voltage axis or the current axis, a fine step or a coarse one. */
+export type Step = {
+  readonly along: 'voltage' | 'current'
+  readonly direction: 'up' | 'down'
+  readonly coarse: boolean
+}
+
+/** What a step of a handle changes. */
+export function stepHandle(setting: HandleSetting, id: HandleId, step: Step): Edit | null {
+  const { stage, choice } = setting
+  const sign = step.direction === 'up' ? 1 : -1
+  if (id === 'supply') {
+    const voltage = Math.min(20e3, Math.max(0, stage.supplyVoltage + sign * (step.coarse ? 10 : 1)))
+    return { kind: 'supply', voltage: Number(voltage.toFixed(6)) }
+  }
+  if (id === 'slope') {
+    return {
+      kind: 'series',
+      resistance: steppedPart(stage.seriesResistance, choice, step, 1, 1e13),
+    }
+  }
+  const index = knotOf(id)
+  const knot = stage.lamp.knots[index]
+  if (knot === undefined) return null
+  if (step.along === 'voltage') {
+    const voltage = Math.max(0, knot.voltage + sign * (step.coarse ? 5 : 0.5))
+    return { kind: 'knot', index, knot: { ...knot, voltage: Number(voltage.toFixed(6)) } }
+  }
+  const factor = step.coarse ? 1.25 : 1.02
+  const current = toFigures(sign > 0 ? knot.current * factor : knot.current / factor, 4)
+  return { kind: 'knot', index, knot: { ...knot, current } }
+}
+
+/** The next value of a part: the neighbour in its series (a decade when coarse), else 1 or 10 per cent. */
+export function steppedPart(
+  value: number,
+  choice: PartChoice,
+  { direction, coarse }: Pick<Step, 'direction' | 'coarse'>,
+  least: number,
+  most: number,
+): number {
+  let next: number
+  if (choice !== 'any' && !coarse) {
+    next = nextPreferred(value, choice, direction) ?? value
+  } else if (choice !== 'any') {
+    next = toFigures(direction === 'up' ? value * 10 : value / 10, 4)
+  } else {
+    const factor = coarse ? 1.1 : 1.01
+    next = toFigures(direction === 'up' ? value * factor : value / factor, 4)
+  }
+  return Math.min(most, Math.max(least, next))
+}

@@ -1,0 +1,24 @@
+/** Most flashes a second shown on screen [WCAG 2.3.1]. */
+export const mostFlashesPerSecond = 3
+
+/** How long a shown flash takes to fade to about a third, s: long enough to be seen at all. */
+const fadeTime = 0.14
+
+/**
+ * Brightness of the lamp drawn on the page, 0 … 1, `elapsed` screen seconds after it was `before`. A lamp
+ * that would flash more often than three times a second on screen shines steadily and dimly instead.
+ *
+ * @param lit whether the stage's lamp was lit at any time since.
+ * @param flashesOnScreen flashes in a second on screen; 0 = it does not flash.
+ */
+export function shownBrightness(
+  before: number,
+  lit: boolean,
+  elapsed: number,
+  flashesOnScreen: number,
+): number {
+  if (flashesOnScreen > mostFlashesPerSecond) return 0.55
+  if (lit) return 1
+  const left = before * Math.exp(-elapsed / fadeTime)
+  return left < 0.01 ? 0 : left
+}
