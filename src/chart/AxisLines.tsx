@@ -16,10 +16,12 @@ export function BottomAxis(props: {
   const floor = bottomOf(box)
   return (
     <g className="axis">
-      {axis.ticks.map(({ value, at, labelled }) => (
+      {axis.ticks.map(({ value, at, labelled, minor }) => (
         <g key={value}>
-          <line className="grid" x1={at} x2={at} y1={box.y} y2={floor} />
-          {through && <line className="grid" x1={at} x2={at} y1={through.y} y2={bottomOf(through)} />}
+          <line className={minor ? 'grid minor' : 'grid'} x1={at} x2={at} y1={box.y} y2={floor} />
+          {through && (
+            <line className="grid" x1={at} x2={at} y1={through.y} y2={bottomOf(through)} />
+          )}
           {labelled && !bare && (
             <text x={at} y={floor + 17} textAnchor="middle">
               {text(value)}
@@ -52,7 +54,9 @@ export function LeftAxis(props: {
       {axis.ticks.map(({ value, at }) => (
         <g key={value}>
           <line className="grid" x1={box.x} x2={rightOf(box)} y1={at} y2={at} />
-          {through && <line className="grid" x1={through.x} x2={rightOf(through)} y1={at} y2={at} />}
+          {through && (
+            <line className="grid" x1={through.x} x2={rightOf(through)} y1={at} y2={at} />
+          )}
           <text x={box.x - 8} y={at + 4} textAnchor="end">
             {text(value)}
           </text>

@@ -1,5 +1,5 @@
 import type { KeyboardEvent } from 'react'
-import { spokenQuantity, type Stage } from '../core'
+import { type Stage, spokenQuantity } from '../core'
 import { type Edit, type HandleId, knotName, type Step } from './handles'
 
 type Slider = {
@@ -76,14 +76,15 @@ function slidersOf(stage: Stage): Slider[] {
   return sliders
 }
 
-const arrows: Readonly<Record<string, { along: Step['along'] | null; up: boolean; page?: true }>> = {
-  ArrowUp: { along: 'voltage', up: true },
-  ArrowDown: { along: 'voltage', up: false },
-  ArrowRight: { along: 'current', up: true },
-  ArrowLeft: { along: 'current', up: false },
-  PageUp: { along: null, up: true, page: true },
-  PageDown: { along: null, up: false, page: true },
-}
+const arrows: Readonly<Record<string, { along: Step['along'] | null; up: boolean; page?: true }>> =
+  {
+    ArrowUp: { along: 'voltage', up: true },
+    ArrowDown: { along: 'voltage', up: false },
+    ArrowRight: { along: 'current', up: true },
+    ArrowLeft: { along: 'current', up: false },
+    PageUp: { along: null, up: true, page: true },
+    PageDown: { along: null, up: false, page: true },
+  }
 
 /**
  * The same handles as native ranges, seen by screen readers and reached by Tab: two for each that moves two

@@ -3,7 +3,13 @@ import type { Ref } from 'react'
 /** A small glow lamp: envelope, two wires, and the glow about the cathode, whose opacity the caller sets. */
 export function LampGlyph({ glow, size }: { glow: Ref<SVGGElement>; size: number }) {
   return (
-    <svg className="lamp-glyph" width={size} height={size} viewBox="-24 -24 48 48" aria-hidden="true">
+    <svg
+      className="lamp-glyph"
+      width={size}
+      height={size}
+      viewBox="-24 -24 48 48"
+      aria-hidden="true"
+    >
       <g ref={glow} className="lamp-glow" style={{ opacity: 0 }}>
         <circle r="23" fill="url(#lamp-halo)" />
         <rect x="-8.5" y="-11" width="9" height="19" rx="4.5" className="lamp-cathode-glow" />

@@ -70,7 +70,9 @@ function JumpArrow({ from, to, y }: { from: number; to: number; y: number }) {
     <g className="jump">
       <line x1={from} x2={to} y1={y} y2={y} />
       {Math.abs(to - from) > 24 && (
-        <path d={`M${middle - 5 * way} ${y - 5}L${middle + 4 * way} ${y}L${middle - 5 * way} ${y + 5}`} />
+        <path
+          d={`M${middle - 5 * way} ${y - 5}L${middle + 4 * way} ${y}L${middle - 5 * way} ${y + 5}`}
+        />
       )}
     </g>
   )

@@ -30,7 +30,7 @@ import { planePicture } from './planePicture'
 import { type Box, bottomOf, plateLayout } from './plateLayout'
 import { TraceDrawing } from './TraceDrawing'
 import { tickWriter } from './tickText'
-import { traceOf } from './traceOf'
+import type { Trace } from './traceOf'
 import { highestCurrent, tracePicture } from './tracePicture'
 import { type Point, useGrab } from './useGrab'
 import { type PanZoom, usePanZoom } from './usePanZoom'
@@ -65,6 +65,7 @@ export type PlateActions = {
 export function Plate(props: {
   stage: Stage
   solution: Solution
+  trace: Trace
   kind: CurrentAxis
   span: Span
   zoom: Zoom
@@ -79,7 +80,8 @@ export function Plate(props: {
   summary: string
   children?: ReactNode
 }) {
-  const { stage, solution, kind, span, zoom, choice, selected, placing, playing, actions } = props
+  const { stage, solution, trace, kind, span, zoom, choice, selected, placing, playing, actions } =
+    props
   const holder = useRef<HTMLDivElement>(null)
   const svg = useRef<SVGSVGElement>(null)
   const planeGround = useRef<SVGRectElement>(null)
@@ -87,13 +89,14 @@ export function Plate(props: {
   const width = useWidth(holder, 1060)
   const layout = useMemo(() => plateLayout(width), [width])
   // While something is dragged the axes stand still under the pointer.
-  const [held, setHeld] = useState<{ x: Domain; y: Domain; time: Domain; amps: Domain } | null>(null)
+  const [held, setHeld] = useState<{ x: Domain; y: Domain; time: Domain; amps: Domain } | null>(
+    null,
+  )
 
   const path = useMemo(
     () => branchesOf(stage.lamp.knots, stage.leadResistance),
     [stage.lamp.knots, stage.leadResistance],
   )
-  const trace = useMemo(() => traceOf(stage, solution, span), [stage, solution, span])
   const x = useMemo(() => {
     const domain = held?.x ?? zoom.current ?? planeDomain(kind, stage, path)
     return currentAxis(kind, domain, [layout.plane.x, layout.plane.x + layout.plane.width])
@@ -119,10 +122,7 @@ export function Plate(props: {
     () => tracePicture(trace, time, traceY, current),
     [trace, time, traceY, current],
   )
-  const setting = useMemo(
-    () => ({ stage, path, x, y, choice }),
-    [stage, path, x, y, choice],
-  )
+  const setting = useMemo(() => ({ stage, path, x, y, choice }), [stage, path, x, y, choice])
   const handles = useMemo(() => handlesOf(setting), [setting])
 
   const planeDot = useRef<SVGGElement>(null)
@@ -164,8 +164,7 @@ export function Plate(props: {
     },
     [actions],
   )
-  const hold = () =>
-    setHeld({ x: x.domain, y: y.domain, time: time.domain, amps: current.domain })
+  const hold = () => setHeld({ x: x.domain, y: y.domain, time: time.domain, amps: current.domain })
   const drag = (event: PointerEvent<SVGElement>, move: (at: Point) => void, id: HandleId) => {
     actions.onSelect(id)
     focusRange(holder.current, id)
@@ -245,7 +244,10 @@ export function Plate(props: {
   const { plane } = layout
 
   return (
-    <div className={`plate ${layout.stacked ? 'stacked' : ''} ${placing ? 'placing' : ''}`} ref={holder}>
+    <div
+      className={`plate ${layout.stacked ? 'stacked' : ''} ${placing ? 'placing' : ''}`}
+      ref={holder}
+    >
       <svg
         ref={svg}
         width={layout.width}
@@ -258,7 +260,13 @@ export function Plate(props: {
           <Clip id="plane-clip" box={plane} />
           <Clip id="trace-clip" box={layout.trace} />
           <Clip id="current-clip" box={layout.current} />
-          <pattern id="hatch" width="9" height="9" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+          <pattern
+            id="hatch"
+            width="9"
+            height="9"
+            patternUnits="userSpaceOnUse"
+            patternTransform="rotate(45)"
+          >
             <line className="hatch" x1="0" x2="0" y1="0" y2="9" />
           </pattern>
         </defs>
@@ -270,7 +278,12 @@ export function Plate(props: {
           through={layout.stacked ? undefined : layout.trace}
         />
         {layout.stacked && (
-          <LeftAxis axis={traceY} box={layout.trace} text={tickWriter} title="voltage across the capacitor, V" />
+          <LeftAxis
+            axis={traceY}
+            box={layout.trace}
+            text={tickWriter}
+            title="voltage across the capacitor, V"
+          />
         )}
         <PlaneDrawing input={input} picture={picture} labels={labels} box={plane} />
         <TraceDrawing
@@ -282,7 +295,13 @@ export function Plate(props: {
         />
         <LevelLines solution={solution} layout={layout} x={x} y={y} traceY={traceY} />
         <rect ref={planeGround} className="ground" data-ground="plane" {...plane} {...planeHands} />
-        <rect ref={traceGround} className="ground" data-ground="trace" {...layout.trace} {...traceHands} />
+        <rect
+          ref={traceGround}
+          className="ground"
+          data-ground="trace"
+          {...layout.trace}
+          {...traceHands}
+        />
         <g clipPath="url(#plane-clip)">
           {/* biome-ignore lint/a11y/noStaticElementInteractions: the native ranges beside carry role, name and keys */}
           <path

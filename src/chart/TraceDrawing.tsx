@@ -1,5 +1,5 @@
-import type { Axis } from './axes'
 import { BottomAxis, LeftAxis } from './AxisLines'
+import type { Axis } from './axes'
 import { type Box, bottomOf, rightOf } from './plateLayout'
 import { axisWriting } from './tickText'
 import type { TracePicture } from './tracePicture'

@@ -7,7 +7,12 @@ export type CurrentAxis = 'logarithmic' | 'linear'
 export type Domain = readonly [from: number, to: number]
 
 /** A number on an axis: its value, its place in px, and whether it carries a label. */
-export type Tick = { readonly value: number; readonly at: number; readonly labelled: boolean }
+export type Tick = {
+  readonly value: number
+  readonly at: number
+  readonly labelled: boolean
+  readonly minor?: boolean
+}
 
 /** Turns values into px and back. */
 export type Axis = {
@@ -47,10 +52,16 @@ export function logarithmicAxis(domain: Domain, range: Domain, spacing: number):
       for (let digit = 1; digit < 10; digit++) {
         // Written as a decimal literal, so that a tick is 1e-6 and not its neighbour.
         const value = Number(`${digit}e${power}`)
-        if (value < domain[0] || value > domain[1] || (digit > 1 && room < 26)) continue
+        if (
+          value < domain[0] ||
+          value > domain[1] ||
+          (digit > 1 && (room < 26 || (room < 110 && digit !== 2 && digit !== 5)))
+        )
+          continue
         ticks.push({
           value,
           at: scale(value),
+          minor: digit > 1,
           labelled: digit === 1 && (((power % step) + step) % step === 0 || step === 1),
         })
       }

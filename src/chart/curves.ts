@@ -95,5 +95,7 @@ export function loadLinePoints(line: LoadLine, kind: CurrentAxis, domain: Domain
     const current = loadCurrent(line, (open * k) / steps)
     if (current > domain[0]) currents.add(current)
   }
-  return [...currents].sort((a, b) => a - b).map((current) => [current, Math.max(0, level(current))])
+  return [...currents]
+    .sort((a, b) => a - b)
+    .map((current) => [current, Math.max(0, level(current))])
 }

@@ -1,6 +1,5 @@
-import { formatQuantity } from '../core'
-import { equivalentSource, loadCurrent, loadLineOf } from '../core'
-import { type Label, placeLabels, type PlacedLabel } from './labels'
+import { equivalentSource, formatQuantity, loadCurrent, loadLineOf } from '../core'
+import { type Label, type PlacedLabel, placeLabels } from './labels'
 import { edgeLines, type PlaneInput, type PlanePicture, slopeHandle } from './planePicture'
 
 /** A label with what it belongs to, for its colour and weight. */
@@ -27,7 +26,11 @@ export function planeLabels(input: PlaneInput, picture: PlanePicture): PlaneLabe
   picture.marks.forEach((mark, index) => {
     if (!visible(mark.x)) return
     const current = formatQuantity(mark.current, 'A', 2)
-    const what = mark.stable ? (mark.lit ? `rests lit, ${current}` : `rests dark, ${current}`) : 'no rest here'
+    const what = mark.stable
+      ? mark.lit
+        ? `rests lit, ${current}`
+        : `rests dark, ${current}`
+      : 'no rest here'
     labels.push({
       id: `plain-mark-${index}`,
       text: what,
@@ -39,11 +42,17 @@ export function planeLabels(input: PlaneInput, picture: PlanePicture): PlaneLabe
   const knee = path.top[0]
   const valley = path.bottom[1]
   if (knee !== undefined && valley !== undefined) {
-    const at = (knot: number) => [x.place(path.current[knot] ?? 0), y.place(path.level[knot] ?? 0)] as const
+    const at = (knot: number) =>
+      [x.place(path.current[knot] ?? 0), y.place(path.level[knot] ?? 0)] as const
     const [kneeX, kneeY] = at(knee)
     const [valleyX, valleyY] = at(valley)
     if (visible(kneeX)) {
-      labels.push({ id: 'lamp-knee', text: 'knee', places: around(kneeX, kneeY, 14), optional: true })
+      labels.push({
+        id: 'lamp-knee',
+        text: 'knee',
+        places: around(kneeX, kneeY, 14),
+        optional: true,
+      })
     }
     if (visible(valleyX)) {
       labels.push({
@@ -98,6 +107,8 @@ export function planeLabels(input: PlaneInput, picture: PlanePicture): PlaneLabe
       optional: true,
     })
   }
+  const region = regionLabel(input, edges)
+  if (region !== null) labels.push(region)
   labels.push(lampLabel(input))
 
   const taken = [
@@ -141,6 +152,24 @@ const beside = (x: number, y: number, gap: number, top: number, floor: number): 
     ]
   })
 
+/** Named where the band between the edges is wide enough, a little above the floor. */
+function regionLabel(
+  { x, y }: PlaneInput,
+  { lit, dark }: ReturnType<typeof edgeLines>,
+): Label | null {
+  if (dark === null) return null
+  const [floor, top] = y.range
+  const places: Label['places'][number][] = []
+  for (const lift of [0.035, 0.1, 0.17, 0.24, 0.31]) {
+    const at = floor - lift * (floor - top)
+    const level = y.value(at)
+    const from = Math.max(x.range[0], x.place(Math.max(0, loadCurrent(dark, level))))
+    const to = lit === null ? x.range[1] : x.place(Math.max(0, loadCurrent(lit, level)))
+    if (to - from > 110) places.push({ x: (from + to) / 2, y: at, anchor: 'middle' })
+  }
+  return { id: 'edge-region', text: 'flashes within', places, optional: true }
+}
+
 /** The characteristic's own name, on the glow branch; on a linear axis, where it goes instead. */
 function lampLabel({ path, x, y, kind }: PlaneInput): Label {
   const last = path.current.length - 1
@@ -176,4 +205,3 @@ function lampLabel({ path, x, y, kind }: PlaneInput): Label {
     optional: true,
   }
 }
-

@@ -10,12 +10,7 @@ import {
   type Stage,
 } from '../core'
 import type { Axis, CurrentAxis } from './axes'
-import {
-  characteristicPoints,
-  loadLinePoints,
-  type PlanePoint,
-  stretchPoints,
-} from './curves'
+import { characteristicPoints, loadLinePoints, type PlanePoint, stretchPoints } from './curves'
 
 /** One rest or crossing to mark. */
 export type Mark = {
@@ -152,12 +147,7 @@ function loopOf(
 const currentAtEnd = (phase: Phase, level: number) =>
   phase.anchorCurrent + phase.conductance * (level - phase.anchorLevel)
 
-function phasePoints(
-  phase: Phase,
-  path: Branches,
-  kind: CurrentAxis,
-  x: Axis,
-): PlanePoint[] {
+function phasePoints(phase: Phase, path: Branches, kind: CurrentAxis, x: Axis): PlanePoint[] {
   const piece = path.current.findIndex(
     (current, k) =>
       phase.kind !== 'waiting' &&
@@ -182,7 +172,11 @@ export function slopeHandleLevel(line: LoadLine, voltage: Axis): number {
 }
 
 /** Place of that handle, px, held within the plot. */
-export function slopeHandle(line: LoadLine, x: Axis, y: Axis): { x: number; y: number; level: number } {
+export function slopeHandle(
+  line: LoadLine,
+  x: Axis,
+  y: Axis,
+): { x: number; y: number; level: number } {
   const level = slopeHandleLevel(line, y)
   const at = x.place(Math.max(loadCurrent(line, level), 0))
   return { x: Math.max(x.range[0], Math.min(x.range[1], at)), y: y.place(level), level }

@@ -1,4 +1,11 @@
-import { type Moment, type Phase, type Solution, type Stage, feedResistance, tracePhases } from '../core'
+import {
+  feedResistance,
+  type Moment,
+  type Phase,
+  type Solution,
+  type Stage,
+  tracePhases,
+} from '../core'
 import type { Span } from './domains'
 
 /** What runs along the time axis: phases laid end to end from time 0, and the moments that draw them. */

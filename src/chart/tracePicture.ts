@@ -16,14 +16,16 @@ export function tracePicture(trace: Trace, time: Axis, voltage: Axis, current: A
   const x = (moment: Moment) => Math.max(-1e5, Math.min(1e5, time.place(moment.time)))
   return {
     voltage:
-      pathMaker<Moment>(x, (moment) => voltage.place(moment.voltage)).digits(2)(trace.moments) ?? '',
-    current:
-      pathMaker<Moment>(x, (moment) => current.place(moment.lampCurrent)).digits(2)(trace.moments) ??
+      pathMaker<Moment>(x, (moment) => voltage.place(moment.voltage)).digits(2)(trace.moments) ??
       '',
-    light:
-      areaMaker<Moment>(x, current.place(0), (moment) => current.place(moment.lampCurrent)).digits(2)(
+    current:
+      pathMaker<Moment>(x, (moment) => current.place(moment.lampCurrent)).digits(2)(
         trace.moments,
       ) ?? '',
+    light:
+      areaMaker<Moment>(x, current.place(0), (moment) => current.place(moment.lampCurrent)).digits(
+        2,
+      )(trace.moments) ?? '',
   }
 }
 

@@ -15,14 +15,14 @@ export type FormatOptions = {
 /** A number and its unit apart. Durations above two minutes are all number ("3 min 20 s"). */
 export type QuantityParts = { readonly number: string; readonly unit: string }
 
-const narrowSpace = '\u202F'
+// No-break, and of full width: a narrow one closes up in bold figures.
 const steadySpace = '\u00A0'
 const minus = '\u2212'
 
 /**
  * A value for people: "4.7 MΩ", "470 nF", "3 min 20 s", "5 %". Rounds before it chooses the prefix,
  * so 999.96 kΩ is 1 MΩ. NaN becomes "–". Times above 120 s go by minutes, hours, days and years
- * unless all figures are wanted. Between number and unit stands a narrow no-break space.
+ * unless all figures are wanted. Between number and unit stands a no-break space.
  * @param value in the SI unit (percent for '%'), any number
  */
 export function formatQuantity(
@@ -31,7 +31,7 @@ export function formatQuantity(
   options: number | FormatOptions = 3,
 ): string {
   const parts = formatParts(value, unit, options)
-  return parts.unit === '' ? parts.number : `${parts.number}${narrowSpace}${parts.unit}`
+  return parts.unit === '' ? parts.number : `${parts.number}${steadySpace}${parts.unit}`
 }
 
 /** As `formatQuantity`, with number and unit apart. */
@@ -92,7 +92,7 @@ export function scaleQuantity(
 function writeDuration(parts: readonly DurationPart[]): string {
   return parts
     .map(
-      ({ count, of }) => `${count}${narrowSpace}${of === 'day' || of === 'year' ? `${of}s` : of}`,
+      ({ count, of }) => `${count}${steadySpace}${of === 'day' || of === 'year' ? `${of}s` : of}`,
     )
     .join(steadySpace)
 }

@@ -37,7 +37,7 @@ export function readNumber(text: string): TypedNumber {
     mantissa: fraction === '' ? digits : `${digits}.${fraction}`,
     exponent,
   } as const
-  return loneMark && mayBeThousands(body)
+  return mayBeThousands(body)
     ? { ...read, note: `The mark in “${body}” was read as the decimal mark, not as thousands.` }
     : read
 }

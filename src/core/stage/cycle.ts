@@ -1,6 +1,6 @@
 import type { Jitter } from './jitter'
 import type { Trail } from './motion'
-import { addPhase, durationOf, lampCurrentIn, noSums, type Phase } from './phase'
+import { addPhase, addSums, durationOf, lampCurrentIn, noSums, type Phase } from './phase'
 import { feedResistance, type Stage } from './stage'
 
 /** One flash after another: a closed cycle, beginning just after the lamp has gone out. */
@@ -62,26 +62,19 @@ export function cycleFrom(
   let low = Number.POSITIVE_INFINITY
   let peak = 0
   for (const phase of phases) {
-    addPhase(phase.kind === 'glow' ? flash : whole, phase)
+    addPhase(phase.kind === 'glow' ? flash : whole, phase, stage.supplyVoltage)
     high = Math.max(high, phase.from, phase.to)
     low = Math.min(low, phase.from, phase.to)
     peak = Math.max(peak, lampCurrentIn(phase, phase.from), lampCurrentIn(phase, phase.to))
   }
-  whole.time += flash.time
-  whole.level += flash.level
-  whole.levelSquared += flash.levelSquared
-  whole.charge += flash.charge
-  whole.currentSquared += flash.currentSquared
-  whole.energy += flash.energy
+  addSums(whole, flash)
 
   const feed = feedResistance(stage)
   const { supplyVoltage: supply, leadResistance: lead } = stage
   const period = whole.time
   const jitter = jitterFor(phases, period)
-  const supplyCharge = (supply * period - whole.level) / feed
-  // ∫(E − v)² dt, over the resistance squared.
-  const supplyCurrentSquared =
-    (supply * supply * period - 2 * supply * whole.level + whole.levelSquared) / (feed * feed)
+  const supplyCharge = whole.drive / feed
+  const supplyCurrentSquared = whole.driveSquared / (feed * feed)
   return {
     periodDeviation: jitter.periodDeviation,
     meanPeriod: jitter.meanPeriod,

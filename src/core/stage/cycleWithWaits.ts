@@ -2,8 +2,8 @@ import { branchesOf } from './branches'
 import { type Cycle, cycleFrom } from './cycle'
 import { noJitter } from './jitter'
 import { follow, type Trail } from './motion'
-import { faultInStage, type Stage } from './stage'
 import { paceOf } from './solveStage'
+import { faultInStage, type Stage } from './stage'
 
 /**
  * The cycle as it runs when the wait before each strike is what `wait` gives, s, asked once a strike, the

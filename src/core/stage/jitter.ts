@@ -1,7 +1,7 @@
 import { type Branches, currentOn, pieceAt } from './branches'
 import { landingAbove } from './landing'
 import { type LoadLine, loadCurrent } from './loadLine'
-import { type Phase, levelIn, timeBetween } from './phase'
+import { levelIn, type Phase, timeBetween } from './phase'
 
 /** What the random wait before each strike makes of the period. */
 export type Jitter = {
@@ -20,10 +20,10 @@ export function noJitter(period: number): Jitter {
 
 // Abscissae and weights of Gauss–Legendre quadrature of order 8 [Abramowitz & Stegun, table 25.4].
 const abscissae = [
-  0.18343464249564980494, 0.52553240991632898582, 0.7966664774136267396, 0.96028985649753623168,
+  0.1834346424956498, 0.525532409916329, 0.7966664774136267396, 0.9602898564975363,
 ]
 const weights = [
-  0.36268378337836198297, 0.31370664587788728734, 0.22238103445337447054, 0.10122853629037625915,
+  0.362683783378362, 0.31370664587788727, 0.22238103445337448, 0.10122853629037626,
 ]
 
 /**
@@ -53,9 +53,10 @@ function timeToFold(
     const to = down ? low : high
     if (high > low && to !== v) {
       const left = path.current[piece] as number
-      const slope = link + ((path.current[piece + 1] as number) - left) / (high - low)
-      const toward = low + (loadCurrent(line, low) - left) / slope
-      time += timeBetween(capacitance / slope, toward, v, to)
+      const right = path.current[piece + 1] as number
+      const slope = link + (right - left) / (high - low)
+      const ahead = (loadCurrent(line, to) - (down ? left : right)) / slope
+      time += timeBetween(capacitance / slope, ahead, v, to)
     }
     v = to
     piece += down ? -1 : 1
@@ -63,7 +64,10 @@ function timeToFold(
   return time
 }
 
-/** Mean and variance of one wait together with the time from the strike to the next fold. */
+/**
+ * Mean and variance of one wait together with the time from the strike to the next fold. `usual` is that sum,
+ * s, at the mean wait: the mean is reckoned from it, so that a delay far shorter than the flash still shows.
+ */
 function spreadOfStrike(
   path: Branches,
   line: LoadLine,
@@ -71,6 +75,7 @@ function spreadOfStrike(
   branch: number,
   waiting: Phase,
   meanWait: number,
+  usual: number,
 ): { mean: number; variance: number; lost: number } {
   const marks = [0]
   const longest = 40 * meanWait
@@ -99,8 +104,9 @@ function spreadOfStrike(
       return
     }
     weight += chance
-    first += chance * (wait + after)
-    second += chance * (wait + after) * (wait + after)
+    const excess = wait + after - usual
+    first += chance * excess
+    second += chance * excess * excess
   }
   for (let k = 0; k + 1 < inside.length; k++) {
     const half = ((inside[k + 1] as number) - (inside[k] as number)) / 2
@@ -137,12 +143,17 @@ export function jitterOf(
     const branch = branchBelow(path, phase)
     const lands = landingAbove(path, branch, phase.to)
     const after = timeToFold(path, line, capacitance, lands, phase.to) ?? 0
-    const spread = spreadOfStrike(path, line, capacitance, branch, phase, meanWait)
+    const usual = phase.duration + after
+    const spread = spreadOfStrike(path, line, capacitance, branch, phase, meanWait, usual)
     variance += spread.variance
-    meanPeriod += spread.mean - (phase.duration + after)
+    meanPeriod += spread.mean
     kept *= 1 - spread.lost
   }
-  return { periodDeviation: Math.sqrt(Math.max(0, variance)), meanPeriod, overRangeChance: 1 - kept }
+  return {
+    periodDeviation: Math.sqrt(Math.max(0, variance)),
+    meanPeriod,
+    overRangeChance: 1 - kept,
+  }
 }
 
 /** The branch a waiting lamp is about to leave: the one that holds its pre-strike current. */

@@ -1,5 +1,12 @@
 import { type Branches, currentOn, pieceAt } from './branches'
-import { landingAbove, landingBelow, recoveryCapacitance, recoveryFloor, topLevel } from './landing'
+import {
+  landingAbove,
+  landingBelow,
+  recoveryCapacitance,
+  recoveryFloor,
+  topLevel,
+  valleyLevel,
+} from './landing'
 import { type LoadLine, loadCurrent } from './loadLine'
 import { type Phase, timeBetween } from './phase'
 import { meetingTime } from './recovery'
@@ -74,7 +81,8 @@ class Motion {
         if (end !== null) return end
         this.wait()
         const lands = landingAbove(this.path, this.branch, this.level)
-        if (lands < 0) return this.fate('over range', this.path.current.at(-1) as number, this.level)
+        if (lands < 0)
+          return this.fate('over range', this.path.current.at(-1) as number, this.level)
         this.land(lands)
         this.extinguished = -1
       } else {
@@ -109,9 +117,7 @@ class Motion {
 
   private mustRecover(): boolean {
     return (
-      this.extinguished >= 0 &&
-      this.pace.recoveryTime > 0 &&
-      this.branch + 1 < this.path.top.length
+      this.extinguished >= 0 && this.pace.recoveryTime > 0 && this.branch + 1 < this.path.top.length
     )
   }
 
@@ -148,13 +154,17 @@ class Motion {
       const high = level[this.piece + 1] as number
       const rests = this.spare(high) <= (current[this.piece + 1] as number)
       if (high > low) {
-        const { toward, timeConstant } = this.pull()
+        const { toward, timeConstant, conductance } = this.pull()
         const from = this.level
-        const duration = rests ? forEver : timeBetween(timeConstant, toward, from, high)
+        const duration = rests
+          ? forEver
+          : timeBetween(timeConstant, this.ahead(high, conductance), from, high)
         const met = meetingTime(recovery, { start: clock, duration, from, toward, timeConstant })
         if (met !== null) {
           const risen = (toward - from) * -Math.expm1(-(met - clock) / timeConstant)
-          this.pass(Math.min(high, from + risen))
+          this.pass(Math.min(high, from + risen), met - clock)
+          // A swing that rounding swallows is none: the lamp does not let go.
+          if (this.level === valleyLevel(path, extinguished)) return this.hold()
           this.current = currentOn(path, this.piece, this.level)
           return null
         }
@@ -222,16 +232,27 @@ class Motion {
     }
   }
 
-  /** Moves on the present piece to `to`. A flat piece is passed in no time. */
-  private pass(to: number): void {
+  /** How far the voltage would still go beyond an end of the present, rising piece, V. */
+  private ahead(end: number, conductance: number): number {
+    const { level, current } = this.path
+    const knot = this.piece + (end === level[this.piece + 1] ? 1 : 0)
+    return (this.spare(end) - (current[knot] as number)) / (this.link + conductance)
+  }
+
+  /**
+   * Moves on the present piece to `to`: to one of its ends, or anywhere where the time it takes is known.
+   * A flat piece is passed in no time.
+   */
+  private pass(to: number, known?: number): void {
     if (this.trail !== null && to !== this.level) {
       const { toward, timeConstant, conductance } = this.pull()
+      const ahead = known === undefined ? this.ahead(to, conductance) : 0
       this.trail.phases.push({
         kind: this.piece < this.path.firstGlowPiece ? 'dark' : 'glow',
-        duration: timeBetween(timeConstant, toward, this.level, to),
+        duration: known ?? timeBetween(timeConstant, ahead, this.level, to),
         from: this.level,
         to,
-        toward,
+        toward: known === undefined ? to + ahead : toward,
         timeConstant,
         anchorCurrent: this.path.current[this.piece] as number,
         anchorLevel: this.path.level[this.piece] as number,

@@ -91,7 +91,10 @@ export function reasonFor(setting: Setting, twoRests: boolean): Reason {
   }
 }
 
-const at = (voltage: number, current: number | undefined) => ({ voltage, current: current as number })
+const at = (voltage: number, current: number | undefined) => ({
+  voltage,
+  current: current as number,
+})
 
 function codeFor({ path, pace, fate }: Setting, twoRests: boolean): ReasonCode {
   if (fate.kind === 'cycle') return 'between knee and valley'
@@ -194,7 +197,11 @@ function bothNeeded({ path, pace, sourceResistance }: Setting): Change[] | null 
   const window = windows[0]
   if (window === undefined) return null
   return [
-    { quantity: 'seriesResistance', sense: 'at least', value: Math.max(0, resistance - sourceResistance) },
+    {
+      quantity: 'seriesResistance',
+      sense: 'at least',
+      value: Math.max(0, resistance - sourceResistance),
+    },
     { quantity: 'supplyVoltage', sense: 'at least', value: (window.min + window.max) / 2 },
   ]
 }

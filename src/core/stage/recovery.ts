@@ -45,10 +45,14 @@ export function meetingTime(recovery: Recovery, charge: Charge): number | null {
   const { start, duration, from, toward, timeConstant } = charge
   const span = recovery.high - recovery.low
   const pull = toward - from
-  const short = (time: number): number => {
-    const level = from + pull * -Math.expm1(-(time - start) / timeConstant)
-    return level - (recovery.low + span * -Math.expm1(-time / recovery.time))
-  }
+  // Neither level is formed: just after extinction both are the same to rounding.
+  const lead = from - recovery.low
+  const short = (time: number): number =>
+    lead -
+    pull * Math.expm1(-(time - start) / timeConstant) +
+    span * Math.expm1(-time / recovery.time)
+  // Met at the very knot between two pieces: rounding may put it on either.
+  if (start > 0 && short(start) >= 0) return start
   const end = start + duration
   const marks: number[] = [start]
   // The slopes agree where (pull/τ)·exp(−(t−start)/τ) = (span/T)·exp(−t/T).

@@ -85,14 +85,16 @@ export function tracePhases(
   const moments: Moment[] = []
   let start = 0
   for (const phase of phases) {
-    const span = Number.isFinite(phase.duration)
-      ? phase.duration
-      : patience * phase.timeConstant
+    const span = Number.isFinite(phase.duration) ? phase.duration : patience * phase.timeConstant
     // Equal steps of exp(−t/τ) put the points where the curve bends most; short phases come out even.
     const fall = -Math.expm1(-Math.min(span / phase.timeConstant, 5))
     for (let k = 0; k <= between + 1; k++) {
       const into =
-        k === 0 ? 0 : k > between ? span : -phase.timeConstant * Math.log1p((-fall * k) / (between + 1))
+        k === 0
+          ? 0
+          : k > between
+            ? span
+            : -phase.timeConstant * Math.log1p((-fall * k) / (between + 1))
       moments.push(momentIn(phase, feed, start + into, k > between ? Math.max(into, span) : into))
     }
     start += span

@@ -1,8 +1,8 @@
 import { type Branches, branchesOf } from './branches'
 import { type Cycle, cycleFrom } from './cycle'
 import { jitterOf, noJitter } from './jitter'
-import { landingBelow, recoveryCapacitance } from './landing'
 import type { Knot } from './lamp'
+import { landingBelow, recoveryCapacitance } from './landing'
 import { loadLineOf, resistanceThrough } from './loadLine'
 import { type Fate, follow, type Pace, type Trail } from './motion'
 import { type OperatingPoint, operatingPointsOf } from './operatingPoints'
@@ -109,7 +109,8 @@ export function solveStage(stage: Stage): Solution {
       window === null
         ? null
         : {
-            toLit: stage.seriesResistance / window.min,
+            toLit:
+              window.min > 0 ? stage.seriesResistance / window.min : Number.POSITIVE_INFINITY,
             toDark: window.max / stage.seriesResistance,
           },
     leastCapacitance,
@@ -189,7 +190,11 @@ function steepestFall(knots: readonly Knot[]): number {
  * Series resistance, Ω, that takes a stage's load line through a point of the plane: `level` V across lamp
  * and lead resistor, `current` A in the lamp. Null where none does.
  */
-export function seriesResistanceThrough(stage: Stage, level: number, current: number): number | null {
+export function seriesResistanceThrough(
+  stage: Stage,
+  level: number,
+  current: number,
+): number | null {
   const total = resistanceThrough(stage.supplyVoltage, 1 / stage.leakageResistance, level, current)
   const series = total - stage.sourceResistance
   return Number.isFinite(series) && series >= 0 ? series : null

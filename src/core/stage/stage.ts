@@ -52,7 +52,9 @@ export function faultInStage(stage: Stage): string | null {
   if (stray !== undefined && !(notNegative(stray) && stray > 0)) {
     return 'The stray capacitance must be more than 0 F.'
   }
-  if (!(stage.leakageResistance > 0)) return 'The leakage must be more than 0 Ω.'
+  if (!(stage.leakageResistance > 0 && Number.isFinite(1 / stage.leakageResistance))) {
+    return 'The leakage must be more than 0 Ω.'
+  }
   if (!notNegative(stage.leadResistance)) return 'The lead resistor must be 0 Ω or more.'
   if (!notNegative(stage.lamp.recoveryTime)) return 'The recovery time must be 0 s or more.'
   if (!notNegative(stage.lamp.strikeDelay)) return 'The strike delay must be 0 s or more.'

@@ -73,11 +73,27 @@ function waitCrossings(
   return found
 }
 
+/** A range narrower than this, as a ratio, is rounding's doing and none. */
+const narrowest = 1 + 1e-9
+
+/** Looks taken between two turns where landings move. */
+const looks = 24
+
+/** Where to look between two neighbouring turns: just inside both ends, and evenly by ratio between. */
+function looksBetween(min: number, max: number): number[] {
+  const span = max - min
+  const low = min > 0 ? min : max * 1e-6
+  const found = [min + span * 1e-12]
+  for (let k = 1; k < looks; k++) found.push(low * (max / low) ** (k / looks))
+  found.push(max - span * 1e-12)
+  return found
+}
+
 /**
  * Ranges of one value within which the stage flashes from switch-on, lowest first. Between two neighbouring
  * turns nothing changes, so one look there settles it. Where strikes come early or late *and* may pass a
- * branch by, the fate can change between turns as well: then both ends are looked at and the change halved
- * down to rounding.
+ * branch by, the fate can change between turns as well: then there are many looks, and each change found is
+ * halved down to rounding. That case alone could miss a range, one narrower than the looks are apart.
  */
 function windowsOver(
   path: Branches,
@@ -106,14 +122,22 @@ function windowsOver(
       if (flashes(min > 0 ? Math.sqrt(min) * Math.sqrt(max) : max / 2)) add(min, max)
       continue
     }
-    const span = max - min
-    const left = flashes(min + span * 1e-12)
-    const right = flashes(max - span * 1e-12)
-    if (left && right) add(min, max)
-    else if (left) add(min, bisect(min, max, flashes))
-    else if (right) add(bisect(min, max, (x) => !flashes(x)), max)
+    const places = looksBetween(min, max)
+    let from = min
+    let inside = flashes(places[0] as number)
+    for (let n = 1; n < places.length; n++) {
+      const a = places[n - 1] as number
+      const b = places[n] as number
+      const before = inside
+      inside = flashes(b)
+      if (inside === before) continue
+      const change = bisect(a, b, (x) => flashes(x) === before)
+      if (before) add(from, change)
+      from = change
+    }
+    if (inside) add(from, max)
   }
-  return found
+  return found.filter((window) => window.max > window.min * narrowest)
 }
 
 /**

@@ -1,0 +1,28 @@
+import { StrictMode } from 'react'
+import { createRoot } from 'react-dom/client'
+import { App } from './panels/App'
+import { startSharing } from './panels/sharing'
+import { look } from './state/viewStore'
+import '@fontsource/source-sans-3/greek-400.css'
+import '@fontsource/source-sans-3/greek-600.css'
+import '@fontsource/source-sans-3/latin-400.css'
+import '@fontsource/source-sans-3/latin-600.css'
+import '@fontsource/source-serif-4/greek-400.css'
+import '@fontsource/source-serif-4/latin-400.css'
+import '@fontsource/source-serif-4/latin-400-italic.css'
+import '@fontsource/source-serif-4/latin-600.css'
+import './style/theme.css'
+import './style/page.css'
+import './style/plate.css'
+import './style/controls.css'
+
+if (window.matchMedia('(prefers-reduced-motion: reduce)').matches) look({ running: false })
+startSharing()
+
+const root = document.getElementById('root')
+if (root === null) throw new Error('The page has no place to draw in.')
+createRoot(root).render(
+  <StrictMode>
+    <App />
+  </StrictMode>,
+)
