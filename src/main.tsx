@@ -1,7 +1,7 @@
 import { StrictMode } from 'react'
 import { createRoot } from 'react-dom/client'
 import { App } from './panels/App'
-import { startSharing } from './panels/sharing'
+import { sharing, startSharing } from './panels/startSharing'
 import { look } from './state/viewStore'
 import '@fontsource/source-sans-3/greek-400.css'
 import '@fontsource/source-sans-3/greek-600.css'
@@ -17,12 +17,14 @@ import './style/plate.css'
 import './style/controls.css'
 
 if (window.matchMedia('(prefers-reduced-motion: reduce)').matches) look({ running: false })
-startSharing()
 
 const root = document.getElementById('root')
 if (root === null) throw new Error('The page has no place to draw in.')
+// Drawn once the design is known, so that no other one flashes up first.
+await startSharing()
 createRoot(root).render(
   <StrictMode>
     <App />
   </StrictMode>,
 )
+window.setTimeout(() => void sharing(), 1000)

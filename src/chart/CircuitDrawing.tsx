@@ -30,7 +30,7 @@ export function CircuitDrawing(props: {
     onClick: () => onPart(name),
   })
   return (
-    <svg className="circuit" viewBox="0 0 340 196" role="img" aria-label={describe(stage)}>
+    <svg className="circuit" viewBox="0 0 340 196" role="img" aria-label={circuitInWords(stage)}>
       <path
         className="wire"
         d={`M24 ${rail}H${hasSource ? 40 : 92}M${hasSource ? 72 : 92} ${rail}H92M150 ${rail}H308V${hasLead ? 60 : 106}M308 140V${ground}H24V118M24 92V${rail}`}
@@ -114,7 +114,7 @@ export function CircuitDrawing(props: {
 }
 
 /** The circuit in a sentence, for those who cannot see it. */
-function describe(stage: Stage): string {
+function circuitInWords(stage: Stage): string {
   const ohms = (value: number) => formatQuantity(value, 'Ω')
   const words = [
     `Circuit: a supply of ${formatQuantity(stage.supplyVoltage, 'V')}`,

@@ -21,8 +21,8 @@ export function PlaneDrawing(props: {
         <path className="edge" d={picture.litEdge} />
         <path className="edge" d={picture.darkEdge} />
         <path className="loop" d={picture.loop} />
-        {picture.jumps.map((jump, index) => (
-          <JumpArrow key={`${index}-${jump.y > 0}`} {...jump} />
+        {picture.jumps.map((jump) => (
+          <JumpArrow key={`${jump.from > jump.to ? 'out' : 'strike'}-${jump.phase}`} {...jump} />
         ))}
         {picture.lampAlone && <path className="lamp-alone" d={picture.lampAlone} />}
         <path className="characteristic" d={picture.characteristic} />

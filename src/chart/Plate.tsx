@@ -303,7 +303,6 @@ export function Plate(props: {
           {...traceHands}
         />
         <g clipPath="url(#plane-clip)">
-          {/* biome-ignore lint/a11y/noStaticElementInteractions: the native ranges beside carry role, name and keys */}
           <path
             className="load-line-target"
             d={picture.loadLine}

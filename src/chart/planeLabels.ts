@@ -1,4 +1,5 @@
 import { equivalentSource, formatQuantity, loadCurrent, loadLineOf } from '../core'
+import { characteristicPoints, loadLinePoints } from './curves'
 import { type Label, type PlacedLabel, placeLabels } from './labels'
 import { edgeLines, type PlaneInput, type PlanePicture, slopeHandle } from './planePicture'
 
@@ -115,6 +116,13 @@ export function planeLabels(input: PlaneInput, picture: PlanePicture): PlaneLabe
     ...picture.marks.map((mark) => spot(mark.x, mark.y, 7)),
     spot(handle.x, handle.y, 12),
     spot(left, openY, 12),
+    ...picture.jumps.map((jump) => ({
+      left: Math.min(jump.from, jump.to),
+      right: Math.max(jump.from, jump.to),
+      top: jump.y - 5,
+      bottom: jump.y + 5,
+    })),
+    ...alongCurves(input),
   ]
   const bounds = { left: left + 2, right: right - 2, top: top + 2, bottom: floor - 3 }
   return placeLabels(labels, bounds, taken).map((label) => ({ ...label, tone: toneOf(label.id) }))
@@ -126,6 +134,28 @@ const spot = (x: number, y: number, radius: number) => ({
   top: y - radius,
   bottom: y + radius,
 })
+
+/** Small spots along load line and characteristic, so that no name stands across them. */
+function alongCurves({ path, kind, x, y, stage }: PlaneInput) {
+  const spots: ReturnType<typeof spot>[] = []
+  const step = 7
+  for (const points of [
+    characteristicPoints(path, kind, x.domain),
+    loadLinePoints(loadLineOf(stage), kind, x.domain),
+  ]) {
+    const places = points.map(([current, voltage]) => [x.place(current), y.place(voltage)] as const)
+    for (let k = 0; k + 1 < places.length; k++) {
+      const [fromX, fromY] = places[k] ?? [0, 0]
+      const [toX, toY] = places[k + 1] ?? [0, 0]
+      const count = Math.min(200, Math.ceil(Math.hypot(toX - fromX, toY - fromY) / step))
+      for (let n = 0; n < count; n++) {
+        const part = n / count
+        spots.push(spot(fromX + part * (toX - fromX), fromY + part * (toY - fromY), 3))
+      }
+    }
+  }
+  return spots
+}
 
 const around = (x: number, y: number, gap: number): Label['places'] => [
   { x: x + gap, y: y - gap + 4, anchor: 'start' },
@@ -183,7 +213,7 @@ function lampLabel({ path, x, y, kind }: PlaneInput): Label {
     return {
       id: 'lamp-name',
       text,
-      places: [-10, 20, -28, 38, -46, 56, -64, 76].map((lift) => ({
+      places: [-10, 20, -28, 38, -46, 56, -64, 76, -82, 94, 112, 130, 148].map((lift) => ({
         x: right - 6,
         y: levelAtEdge + lift,
         anchor: 'end' as const,

@@ -22,7 +22,13 @@ export type Mark = {
 }
 
 /** A jump of the loop at one voltage, from x to x, px. */
-export type Jump = { readonly from: number; readonly to: number; readonly y: number }
+export type Jump = {
+  readonly from: number
+  readonly to: number
+  readonly y: number
+  /** Which phase of the cycle it ends. */
+  readonly phase: number
+}
 
 /** Everything drawn on the plane, as SVG paths and places in px. */
 export type PlanePicture = {
@@ -138,7 +144,7 @@ function loopOf(
     const from = currentAtEnd(phase, phase.to)
     const to = currentAtEnd(next, next.from)
     if (Math.abs(to - from) > 1e-9 * Math.max(to, from)) {
-      jumps.push({ from: x.place(from), to: x.place(to), y: y.place(phase.to) })
+      jumps.push({ from: x.place(from), to: x.place(to), y: y.place(phase.to), phase: index })
     }
   })
   return { loop: pieces.join(''), jumps }

@@ -44,11 +44,16 @@ export function plateLayout(width: number): PlateLayout {
   const trace = { x: traceX, y: topMargin, width: inner - planeWidth, height }
   return {
     width: whole,
-    height: topMargin + height + 164,
+    height: topMargin + height + (whole < 900 ? 196 : 164),
     stacked: false,
     plane: { x: leftMargin, y: topMargin, width: planeWidth, height },
     trace,
-    current: { x: traceX, y: topMargin + height + 32, width: trace.width, height: 84 },
+    current: {
+      x: traceX,
+      y: topMargin + height + 32,
+      width: trace.width,
+      height: whole < 900 ? 116 : 84,
+    },
   }
 }
 

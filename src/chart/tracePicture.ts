@@ -23,9 +23,9 @@ export function tracePicture(trace: Trace, time: Axis, voltage: Axis, current: A
         trace.moments,
       ) ?? '',
     light:
-      areaMaker<Moment>(x, current.place(0), (moment) => current.place(moment.lampCurrent)).digits(
-        2,
-      )(trace.moments) ?? '',
+      areaMaker<Moment>(x, current.place(0), (moment) => current.place(moment.lampCurrent))
+        .defined((moment) => moment.lit)
+        .digits(2)(trace.moments) ?? '',
   }
 }
 

@@ -55,7 +55,7 @@ export function useGrab(): (
       target.removeEventListener('pointerup', up)
       target.removeEventListener('pointercancel', cancel)
       target.removeEventListener('lostpointercapture', cancel)
-      window.removeEventListener('keydown', escape, true)
+      window.removeEventListener('keydown', leave, true)
       if (target.hasPointerCapture(pointer)) target.releasePointerCapture(pointer)
       if (cancelled) grab.onCancel()
       else grab.onEnd()
@@ -64,7 +64,7 @@ export function useGrab(): (
       if (released.pointerId === pointer) end(false)
     }
     const cancel = () => end(true)
-    const escape = (key: KeyboardEvent) => {
+    const leave = (key: KeyboardEvent) => {
       if (key.key !== 'Escape') return
       key.stopPropagation()
       end(true)
@@ -75,7 +75,7 @@ export function useGrab(): (
     target.addEventListener('pointerup', up)
     target.addEventListener('pointercancel', cancel)
     target.addEventListener('lostpointercapture', cancel)
-    window.addEventListener('keydown', escape, true)
+    window.addEventListener('keydown', leave, true)
     grab.onStart(pointOn(svg, event))
   }, [])
 }

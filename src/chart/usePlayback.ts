@@ -11,11 +11,11 @@ export type Playing = {
 /** Told at each frame: the time on the trace, s, and how much of the stage's time went by since, s. */
 export type Tick = (time: number, elapsed: number) => void
 
-/** The place after `elapsed` seconds on a trace that loops, or runs once and begins again. */
+/** The place after `elapsed` seconds on a trace that loops, or runs once and stays at its end. */
 export function advance(trace: Trace, time: number, elapsed: number): number {
   const { loop, length } = trace
   const next = time + elapsed
-  if (loop === null) return length > 0 ? next % length : 0
+  if (loop === null) return Math.min(next, length)
   if (next < loop.to) return next
   const period = loop.to - loop.from
   return period > 0 ? loop.from + ((next - loop.from) % period) : loop.from
@@ -37,6 +37,9 @@ export function usePlayback(
 
   useEffect(() => {
     if (!playing.running) return
+    // Running again from the end of a trace that does not loop begins anew.
+    const { trace: whole } = latest.current
+    if (whole.loop === null && time.current >= whole.length) time.current = 0
     let frame = 0
     let before: number | null = null
     const next = (now: number) => {
@@ -53,7 +56,9 @@ export function usePlayback(
   }, [playing.running])
 
   useEffect(() => {
-    time.current = advance(trace, time.current, 0)
+    const { playing: pace } = latest.current
+    time.current =
+      trace.loop === null && !pace.running ? trace.length : advance(trace, time.current, 0)
     latest.current.tick(time.current, 0)
   }, [trace])
 

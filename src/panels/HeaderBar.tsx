@@ -2,7 +2,8 @@ import { useRef, useState } from 'react'
 import { examples } from '../state/examples'
 import { designStore, useDesign } from '../state/useDesign'
 import { look, type Theme, useView } from '../state/viewStore'
-import { openFile, saveFile, shareLink } from './sharing'
+import type { Shared } from './sharing'
+import { sharing } from './startSharing'
 
 /** Name, title of the design, and what can be done with it as a whole. */
 export function HeaderBar() {
@@ -46,10 +47,14 @@ export function HeaderBar() {
           onChange={(event) => {
             const chosen = event.currentTarget.files?.[0]
             event.currentTarget.value = ''
-            if (chosen !== undefined) void openFile(chosen)
+            if (chosen !== undefined) void sharing().then(({ openFile }) => openFile(chosen))
           }}
         />
-        <button type="button" className="button" onClick={saveFile}>
+        <button
+          type="button"
+          className="button"
+          onClick={() => void sharing().then(({ saveFile }) => saveFile())}
+        >
           Save
         </button>
         <LinkMenu />
@@ -88,7 +93,7 @@ function ExamplesMenu() {
 }
 
 function LinkMenu() {
-  const [shared, setShared] = useState<ReturnType<typeof shareLink> | null>(null)
+  const [shared, setShared] = useState<Shared | null>(null)
   const [copied, setCopied] = useState(false)
   const field = useRef<HTMLTextAreaElement>(null)
   const copy = async () => {
@@ -108,8 +113,8 @@ function LinkMenu() {
         className="button strong"
         popoverTarget="link"
         onClick={() => {
-          setShared(shareLink())
           setCopied(false)
+          void sharing().then(({ shareLink }) => setShared(shareLink()))
         }}
       >
         Link
@@ -142,7 +147,7 @@ function LinkMenu() {
 }
 
 const themes: readonly Theme[] = ['system', 'light', 'dark']
-const themeWords = { system: 'Light or dark', light: 'Light', dark: 'Dark' } as const
+const themeWords = { system: 'As system', light: 'Light', dark: 'Dark' } as const
 
 function ThemeChoice() {
   const theme = useView((view) => view.theme)

@@ -4,7 +4,7 @@ import { designStore, useDesign } from '../state/useDesign'
 import { QuantityField } from './parts/QuantityField'
 
 /** The lamp by its figures: each knot of the characteristic, and its two times. */
-export function LampFigures() {
+export default function LampFigures() {
   const lamp = useDesign((state) => state.design.stage.lamp)
   const lampName = useDesign((state) => state.design.lampName)
   const { change, changeKnot, addKnot, removeKnot } = designStore.getState()

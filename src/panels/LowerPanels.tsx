@@ -1,3 +1,4 @@
+import { Suspense } from 'react'
 import { look, useView } from '../state/viewStore'
 import { panelList } from './panelList'
 
@@ -20,7 +21,9 @@ export function LowerPanels() {
           </button>
         ))}
       </nav>
-      <panel.Body />
+      <Suspense fallback={<p className="nothing">Opening …</p>}>
+        <panel.Body />
+      </Suspense>
     </section>
   )
 }

@@ -62,45 +62,51 @@ export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
   return (
     <section className="plate-panel" aria-label="Plane and trace">
       <div className="plate-tools">
-        <Choice
-          name="Current axis"
-          value={view.currentAxis}
-          options={[
-            ['logarithmic', 'Logarithmic'],
-            ['linear', 'Linear'],
-          ]}
-          onChoose={(currentAxis) =>
-            look({ currentAxis, zoom: { ...viewStore.getState().zoom, current: null } })
-          }
-        />
-        <ZoomButtons
-          of="plane"
-          onZoom={(factor) => look({ zoom: zoomPlane(view.zoom, view.currentAxis, stage, factor) })}
-          onWhole={() => look({ zoom: { ...view.zoom, current: null, voltage: null } })}
-          zoomed={view.zoom.current !== null || view.zoom.voltage !== null}
-        />
-        <Choice
-          name="Time"
-          value={solution.cycle === null ? 'switch-on' : span}
-          options={
-            solution.cycle === null
-              ? [['switch-on', 'From switch-on']]
-              : [
-                  ['cycles', 'Cycles'],
-                  ['flash', 'One flash'],
-                  ['switch-on', 'From switch-on'],
-                ]
-          }
-          onChoose={(value) =>
-            look({ span: value, zoom: { ...viewStore.getState().zoom, time: null } })
-          }
-        />
-        <ZoomButtons
-          of="time"
-          onZoom={(factor) => look({ zoom: zoomTime(view.zoom, span, solution, trace, factor) })}
-          onWhole={() => look({ zoom: { ...view.zoom, time: null } })}
-          zoomed={view.zoom.time !== null}
-        />
+        <div>
+          <Choice
+            name="Current axis"
+            value={view.currentAxis}
+            options={[
+              ['logarithmic', 'Logarithmic'],
+              ['linear', 'Linear'],
+            ]}
+            onChoose={(currentAxis) =>
+              look({ currentAxis, zoom: { ...viewStore.getState().zoom, current: null } })
+            }
+          />
+          <ZoomButtons
+            of="plane"
+            onZoom={(factor) =>
+              look({ zoom: zoomPlane(view.zoom, view.currentAxis, stage, factor) })
+            }
+            onWhole={() => look({ zoom: { ...view.zoom, current: null, voltage: null } })}
+            zoomed={view.zoom.current !== null || view.zoom.voltage !== null}
+          />
+        </div>
+        <div>
+          <Choice
+            name="Time"
+            value={solution.cycle === null ? 'switch-on' : span}
+            options={
+              solution.cycle === null
+                ? [['switch-on', 'From switch-on']]
+                : [
+                    ['cycles', 'Cycles'],
+                    ['flash', 'One flash'],
+                    ['switch-on', 'From switch-on'],
+                  ]
+            }
+            onChoose={(value) =>
+              look({ span: value, zoom: { ...viewStore.getState().zoom, time: null } })
+            }
+          />
+          <ZoomButtons
+            of="time"
+            onZoom={(factor) => look({ zoom: zoomTime(view.zoom, span, solution, trace, factor) })}
+            onWhole={() => look({ zoom: { ...view.zoom, time: null } })}
+            zoomed={view.zoom.time !== null}
+          />
+        </div>
       </div>
       <Plate
         stage={stage}
@@ -115,7 +121,7 @@ export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
         playing={{ running: view.running, speed }}
         cursor={view.cursor}
         actions={actions}
-        summary={`Plane and trace. ${words.verdict} ${words.sentence}`}
+        summary={`Plane and trace. ${words.verdict}${words.sentence}`}
       >
         <div className="under-plane">
           <HandleBar />

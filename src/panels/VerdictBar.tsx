@@ -16,7 +16,8 @@ export function VerdictBar({ glow }: { glow: Ref<SVGGElement> }) {
         <LampGlyph glow={glow} size={64} />
         <div>
           <h2 aria-live="polite" data-verdict={solution.verdict}>
-            <strong>{words.verdict}</strong> {words.sentence}
+            <strong>{words.verdict}</strong>
+            {words.sentence}
           </h2>
           <p className="advice">{words.advice}</p>
         </div>

@@ -1,8 +1,7 @@
-import type { ComponentType } from 'react'
+import { type ComponentType, lazy } from 'react'
 import { FiguresPanel } from './FiguresPanel'
-import { LampFigures } from './LampFigures'
 
-/** A panel below the plate. A new one is one more line here. */
+/** A panel below the plate. A new one is one more line here; all but the first are loaded when opened. */
 export type Panel = {
   /** Never changes; letters and hyphens. */
   readonly id: string
@@ -13,5 +12,5 @@ export type Panel = {
 /** The panels, in the order they are shown. */
 export const panelList: readonly Panel[] = [
   { id: 'figures', name: 'Figures', Body: FiguresPanel },
-  { id: 'lamp', name: 'Lamp', Body: LampFigures },
+  { id: 'lamp', name: 'Lamp', Body: lazy(() => import('./LampFigures')) },
 ]

@@ -1,78 +1,57 @@
 import { fileNameFor, readDesignFile, writeDesignFile } from '../io/designFile'
 import { linkFragment, openFragment } from '../io/link'
 import { keepDesign, lazyStore, restoreDesign } from '../io/localKeep'
+import type { Opened } from '../io/opened'
 import { designStore } from '../state/useDesign'
 import { look } from '../state/viewStore'
 
 const store = lazyStore(() => window.localStorage)
 
-/** At most one write in this time, ms: browsers refuse more than about three a second for long. */
-const pause = 400
-
-/**
- * Puts the design on the page that the address names, else the one kept from the last visit, and from then
- * on keeps design and address in step. Returns what undoes the listening.
- */
-export function startSharing(): () => void {
+/** Puts the design kept from the last visit on the page, then the one the address names, if any. */
+export function openFirst(): void {
   const kept = restoreDesign(store)
   if (kept?.ok) designStore.getState().startWith(kept.design)
   else if (kept !== null) designStore.getState().say(kept.message)
   openAddress()
-
-  let timer = 0
-  let told = false
-  const write = () => {
-    timer = 0
-    const { design, dragging, say } = designStore.getState()
-    if (dragging) return
-    const link = linkFragment(design)
-    if (link.ok) history.replaceState(history.state, '', link.fragment)
-    const result = keepDesign(store, design)
-    if (!result.ok && !told) {
-      told = true
-      say(result.message)
-    }
-  }
-  const stop = designStore.subscribe((state, before) => {
-    const changed = state.design !== before.design || state.dragging !== before.dragging
-    if (changed && !state.dragging && timer === 0) timer = window.setTimeout(write, pause)
-  })
-  // A page about to go away writes what it has not written yet.
-  const leave = () => {
-    if (timer === 0) return
-    window.clearTimeout(timer)
-    write()
-  }
-  window.addEventListener('hashchange', openAddress)
-  window.addEventListener('pagehide', leave)
-  return () => {
-    stop()
-    window.clearTimeout(timer)
-    window.removeEventListener('hashchange', openAddress)
-    window.removeEventListener('pagehide', leave)
-  }
 }
 
 /** Opens the design in the address, if there is one; a damaged one is reported and changes nothing. */
-function openAddress(): void {
-  const opened = openFragment(window.location.hash)
-  if (opened === null) return
+export function openAddress(): void {
+  const { hash } = window.location
+  const opened = openFragment(hash)
+  if (opened !== null) show(opened, hash)
+}
+
+function show(opened: Opened, text: string): void {
   if (opened.ok) {
     look({ failure: null })
     designStore.getState().open(opened.design, opened.notes.join(' ') || undefined)
   } else {
-    look({
-      failure: {
-        message: opened.message,
-        detail: opened.detail ?? null,
-        text: window.location.hash,
-      },
-    })
+    look({ failure: { message: opened.message, detail: opened.detail ?? null, text } })
   }
 }
 
+let told = false
+
+/** Writes the design into the address and keeps it for the next visit. */
+export function keep(): void {
+  const { design, say } = designStore.getState()
+  const link = linkFragment(design)
+  if (link.ok) history.replaceState(history.state, '', link.fragment)
+  const result = keepDesign(store, design)
+  if (!result.ok && !told) {
+    told = true
+    say(result.message)
+  }
+}
+
+/** What comes of making a link. */
+export type Shared =
+  | { readonly ok: true; readonly link: string }
+  | { readonly ok: false; readonly message: string }
+
 /** The link to this design, or a sentence that says why there is none. */
-export function shareLink(): { ok: true; link: string } | { ok: false; message: string } {
+export function shareLink(): Shared {
   const link = linkFragment(designStore.getState().design)
   if (!link.ok) return link
   return { ok: true, link: `${window.location.href.replace(/#.*$/, '')}${link.fragment}` }
@@ -95,24 +74,15 @@ export function saveFile(): void {
 }
 
 const mostBytes = 4_000_000
+const mostShown = 20_000
 
 /** Opens a saved design; what cannot be read is reported and changes nothing. */
 export async function openFile(file: File): Promise<void> {
-  const tooLarge = file.size > mostBytes
-  const text = tooLarge ? '' : await file.text()
-  const opened = readDesignFile(text)
-  if (opened.ok) {
-    look({ failure: null })
-    designStore.getState().open(opened.design, opened.notes.join(' ') || undefined)
+  if (file.size > mostBytes) {
+    const message = 'This file is far larger than a design of Glowloop can be.'
+    look({ failure: { message, detail: null, text: '' } })
     return
   }
-  look({
-    failure: {
-      message: tooLarge
-        ? 'This file is far larger than a design of Glowloop can be.'
-        : opened.message,
-      detail: opened.detail ?? null,
-      text: text.slice(0, 20_000),
-    },
-  })
+  const text = await file.text()
+  show(readDesignFile(text), text.slice(0, mostShown))
 }

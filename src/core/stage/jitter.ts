@@ -19,12 +19,8 @@ export function noJitter(period: number): Jitter {
 }
 
 // Abscissae and weights of Gauss–Legendre quadrature of order 8 [Abramowitz & Stegun, table 25.4].
-const abscissae = [
-  0.1834346424956498, 0.525532409916329, 0.7966664774136267396, 0.9602898564975363,
-]
-const weights = [
-  0.362683783378362, 0.31370664587788727, 0.22238103445337448, 0.10122853629037626,
-]
+const abscissae = [0.1834346424956498, 0.525532409916329, 0.7966664774136267, 0.9602898564975363]
+const weights = [0.362683783378362, 0.31370664587788727, 0.22238103445337448, 0.10122853629037626]
 
 /**
  * Time, s, from landing at `level` on `branch` to that branch's next fold; null where the motion comes to

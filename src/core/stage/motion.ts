@@ -169,6 +169,13 @@ class Motion {
           return null
         }
         clock += duration
+        if (high === recovery.high && !rests) {
+          // The strike voltage is still short of its full height, be it by less than rounding shows, so a
+          // flat knee is not entered.
+          this.pass(high)
+          this.current = current[this.piece + 1] as number
+          return null
+        }
       }
       if (rests) return this.rest()
       this.pass(high)

@@ -2,7 +2,7 @@ import type { Branches } from './branches'
 import { topLevel, valleyLevel } from './landing'
 import { equivalentSource, type LoadLine, loadCurrent } from './loadLine'
 import { type Fate, follow, type Pace } from './motion'
-import { nearestWindow, supplyWindows, type Window } from './windows'
+import { mostAtValley, nearestWindow, supplyWindows, type Window } from './windows'
 
 /** Why the verdict is what it is. */
 export type ReasonCode =
@@ -18,7 +18,7 @@ export type ReasonCode =
   | 'too much current at the valley'
   /** Lit: it would go out, but the capacitor charges faster than the strike voltage comes back. */
   | 'cannot recover'
-  /** The characteristic, lead resistor included, has no falling region. */
+  /** The characteristic, lead resistor included, has no falling region, or none below where it rests. */
   | 'no falling region'
   /** Dark and lit rests both exist. */
   | 'two rests'
@@ -47,7 +47,7 @@ export type Remedy = readonly Change[]
 /** Why the verdict is what it is, with the numbers for one sentence. */
 export type Reason = {
   readonly code: ReasonCode
-  /** Knee and valley as the capacitor sees them: V, and lamp current there, A. Null of no falling region. */
+  /** Knee and valley as the capacitor sees them: V, and lamp current there, A. Null of no falling region, and of no valley. */
   readonly strike: { readonly voltage: number; readonly current: number } | null
   readonly extinction: { readonly voltage: number; readonly current: number } | null
   /** Current the load line leaves for the lamp at strike and at extinction voltage, A. */
@@ -65,8 +65,8 @@ export type Setting = {
   readonly sourceResistance: number
   readonly seriesResistance: number
   readonly leadResistance: number
-  /** Steepest fall of the lamp alone, Ω; 0 = it never falls. */
-  readonly steepestFall: number
+  /** Lead resistance, Ω, below which the stage would flash, asked where this one leaves no glow branch. */
+  readonly leadNeeded: number | null
   readonly window: Window | null
   readonly leastCapacitance: number | null
 }
@@ -76,7 +76,7 @@ export function reasonFor(setting: Setting, twoRests: boolean): Reason {
   const { path, pace, fate } = setting
   const folds = path.top.length > 1
   const line = pace.line
-  const strike = folds ? at(topLevel(path, 0), path.current[path.top[0] as number]) : null
+  const strike = falls(path) ? at(topLevel(path, 0), path.current[path.top[0] as number]) : null
   const valley = fate.kind !== 'rest' && fate.branch > 0 ? fate.branch : Math.max(1, fate.branch)
   const extinction = folds
     ? at(valleyLevel(path, valley), path.current[path.bottom[valley] as number])
@@ -96,6 +96,9 @@ const at = (voltage: number, current: number | undefined) => ({
   current: current as number,
 })
 
+/** Whether anything falls at all, be it at the very end of the data. */
+const falls = (path: Branches) => (path.top[0] as number) + 1 < path.level.length
+
 function codeFor({ path, pace, fate }: Setting, twoRests: boolean): ReasonCode {
   if (fate.kind === 'cycle') return 'between knee and valley'
   if (fate.kind === 'held') return 'cannot recover'
@@ -105,7 +108,9 @@ function codeFor({ path, pace, fate }: Setting, twoRests: boolean): ReasonCode {
       : 'strike beyond the data'
   }
   if (twoRests) return 'two rests'
-  if (path.top.length < 2) return 'no falling region'
+  const straightened =
+    fate.branch === 0 && fate.current > (path.current[path.firstGlowPiece] as number)
+  if (!falls(path) || straightened) return 'no falling region'
   if (fate.branch > 0) return 'too much current at the valley'
   const strike = topLevel(path, 0)
   if (pace.line.voltage <= strike) return 'supply below strike'
@@ -121,11 +126,8 @@ function remediesFor(setting: Setting): Remedy[] {
   const found: { remedy: Remedy; cost: number }[] = []
   const offer = (cost: number, ...remedy: Change[]) => found.push({ remedy, cost })
   if (path.top.length < 2) {
-    // The lead resistor straightens the falling region out where it outdoes its slope.
-    const limit = setting.steepestFall
-    if (limit > 0 && setting.leadResistance >= limit) {
-      offer(0, { quantity: 'leadResistance', sense: 'at most', value: limit })
-    }
+    const limit = setting.leadNeeded
+    if (limit !== null) offer(0, { quantity: 'leadResistance', sense: 'at most', value: limit })
     return found.map(({ remedy }) => remedy)
   }
   if (window !== null) {
@@ -147,7 +149,7 @@ function remediesFor(setting: Setting): Remedy[] {
       value,
     })
   }
-  if (setting.fate.kind === 'held' && setting.leastCapacitance !== null) {
+  if (setting.leastCapacitance !== null && pace.capacitance <= setting.leastCapacitance) {
     const value = setting.leastCapacitance
     offer(size(pace.capacitance, value), { quantity: 'capacitance', sense: 'at least', value })
   }
@@ -189,9 +191,9 @@ function bothNeeded({ path, pace, sourceResistance }: Setting): Change[] | null 
   const valley = path.bottom[1] as number
   const drop = (path.level[knee] as number) - (path.level[valley] as number)
   const { leakage } = pace.line
-  const gain = (path.current[valley] as number) - (path.current[knee] as number) - drop * leakage
+  const gain = mostAtValley(path, pace) - (path.current[knee] as number) - drop * leakage
   if (!(gain > 0)) return null
-  const resistance = (2 * drop) / gain
+  const resistance = Math.max(sourceResistance, (2 * drop) / gain)
   const line: LoadLine = { voltage: pace.line.voltage, resistance, leakage }
   const windows = supplyWindows(path, { ...pace, line })
   const window = windows[0]

@@ -73,7 +73,7 @@ export function sampleCycle(cycle: Cycle, count: number): Moment[] {
 
 /**
  * Moments along a row of phases for drawing: both ends of every phase, so that corners and jumps are exact,
- * and `between` more inside each, closer together where the voltage bends. An endless phase is followed for
+ * and `between` more inside each, half of them where the voltage bends most. An endless phase is followed for
  * `patience` of its time constants.
  */
 export function tracePhases(
@@ -86,18 +86,23 @@ export function tracePhases(
   let start = 0
   for (const phase of phases) {
     const span = Number.isFinite(phase.duration) ? phase.duration : patience * phase.timeConstant
-    // Equal steps of exp(−t/τ) put the points where the curve bends most; short phases come out even.
-    const fall = -Math.expm1(-Math.min(span / phase.timeConstant, 5))
-    for (let k = 0; k <= between + 1; k++) {
-      const into =
-        k === 0
-          ? 0
-          : k > between
-            ? span
-            : -phase.timeConstant * Math.log1p((-fall * k) / (between + 1))
-      moments.push(momentIn(phase, feed, start + into, k > between ? Math.max(into, span) : into))
+    for (const into of timesWithin(span, phase.timeConstant, between)) {
+      moments.push(momentIn(phase, feed, start + into, into))
     }
     start += span
   }
   return moments
+}
+
+/** Times from 0 to `span`, both included: half even in time, half even in the exponential's fall. */
+function timesWithin(span: number, timeConstant: number, between: number): number[] {
+  const times = [0, span]
+  const even = Math.floor(between / 2)
+  const bent = between - even
+  const fall = -Math.expm1(-Math.min(span / timeConstant, 20))
+  for (let k = 1; k <= even; k++) times.push((span * k) / (even + 1))
+  for (let k = 1; k <= bent; k++) {
+    times.push(-timeConstant * Math.log1p((-fall * k) / (bent + 1)))
+  }
+  return times.sort((a, b) => a - b)
 }

@@ -1,15 +1,15 @@
 import { type Branches, branchesOf } from './branches'
 import { type Cycle, cycleFrom } from './cycle'
 import { jitterOf, noJitter } from './jitter'
-import type { Knot } from './lamp'
 import { landingBelow, recoveryCapacitance } from './landing'
+import { leadNeeded } from './leadNeeded'
 import { loadLineOf, resistanceThrough } from './loadLine'
 import { type Fate, follow, type Pace, type Trail } from './motion'
 import { type OperatingPoint, operatingPointsOf } from './operatingPoints'
 import type { Phase } from './phase'
 import { type Reason, reasonFor } from './reason'
 import { effectiveCapacitance, faultInStage, type Stage } from './stage'
-import { nearestWindow, resistanceWindows, type Window } from './windows'
+import { capacitanceWindows, nearestWindow, resistanceWindows, type Window } from './windows'
 
 /** What becomes of a stage, in plain words. */
 export type Verdict = 'flashes' | 'stays dark' | 'stays lit' | 'latches' | 'over range'
@@ -34,8 +34,9 @@ export type Solution = {
    */
   readonly margin: { readonly toLit: number; readonly toDark: number } | null
   /**
-   * Least capacitance, F, at which the lamp still recovers and flashes with this load line; 0 = any; null
-   * where this load line does not flash with any.
+   * Least capacitance, F, at which the stage still flashes with this load line: with less the lamp cannot
+   * recover, or the strike delay carries it off the end of the characteristic. 0 = any; null where this load
+   * line does not flash with any.
    */
   readonly leastCapacitance: number | null
   /** Capacitance reckoned with, F, and whether it is the stray one because none is fitted. */
@@ -96,7 +97,7 @@ export function solveStage(stage: Stage): Solution {
         sourceResistance: stage.sourceResistance,
         seriesResistance: stage.seriesResistance,
         leadResistance: stage.leadResistance,
-        steepestFall: path.top.length < 2 ? steepestFall(lamp.knots) : 0,
+        leadNeeded: path.top.length < 2 ? leadNeeded(lamp.knots, pace, stage.leadResistance) : null,
         window,
         leastCapacitance,
       },
@@ -109,8 +110,7 @@ export function solveStage(stage: Stage): Solution {
       window === null
         ? null
         : {
-            toLit:
-              window.min > 0 ? stage.seriesResistance / window.min : Number.POSITIVE_INFINITY,
+            toLit: window.min > 0 ? stage.seriesResistance / window.min : Number.POSITIVE_INFINITY,
             toDark: window.max / stage.seriesResistance,
           },
     leastCapacitance,
@@ -171,19 +171,13 @@ function holdPoint(points: OperatingPoint[], fate: Fate, leadResistance: number)
 }
 
 function leastCapacitanceOf(path: Branches, pace: Pace, fate: Fate): number | null {
+  if (path.top.length < 2) return null
+  if (path.top.length > 2 || pace.wait !== null) {
+    return nearestWindow(capacitanceWindows(path, pace), pace.capacitance)?.min ?? null
+  }
   if (fate.kind !== 'cycle' && fate.kind !== 'held') return null
   const { branch } = fate
   return recoveryCapacitance(path, pace.line, pace.recoveryTime, branch, landingBelow(path, branch))
-}
-
-function steepestFall(knots: readonly Knot[]): number {
-  let steepest = 0
-  for (let i = 0; i + 1 < knots.length; i++) {
-    const left = knots[i] as Knot
-    const right = knots[i + 1] as Knot
-    steepest = Math.max(steepest, (left.voltage - right.voltage) / (right.current - left.current))
-  }
-  return steepest
 }
 
 /**

@@ -1,5 +1,12 @@
 import { type Branches, currentOn, pieceAt } from './branches'
-import { landingAbove, landingBelow, recoveryFloor, topLevel, valleyLevel } from './landing'
+import {
+  landingAbove,
+  landingBelow,
+  recoveryCapacitance,
+  recoveryFloor,
+  topLevel,
+  valleyLevel,
+} from './landing'
 import { type LoadLine, loadCurrent, resistanceThrough, supplyThrough } from './loadLine'
 import { follow, type Pace } from './motion'
 import { bisect } from './recovery'
@@ -76,15 +83,12 @@ function waitCrossings(
 /** A range narrower than this, as a ratio, is rounding's doing and none. */
 const narrowest = 1 + 1e-9
 
-/** Looks taken between two turns where landings move. */
-const looks = 24
-
 /** Where to look between two neighbouring turns: just inside both ends, and evenly by ratio between. */
-function looksBetween(min: number, max: number): number[] {
+function looksBetween(min: number, max: number, parts: number): number[] {
   const span = max - min
   const low = min > 0 ? min : max * 1e-6
   const found = [min + span * 1e-12]
-  for (let k = 1; k < looks; k++) found.push(low * (max / low) ** (k / looks))
+  for (let k = 1; k < parts; k++) found.push(low * (max / low) ** (k / parts))
   found.push(max - span * 1e-12)
   return found
 }
@@ -92,8 +96,9 @@ function looksBetween(min: number, max: number): number[] {
 /**
  * Ranges of one value within which the stage flashes from switch-on, lowest first. Between two neighbouring
  * turns nothing changes, so one look there settles it. Where strikes come early or late *and* may pass a
- * branch by, the fate can change between turns as well: then there are many looks, and each change found is
- * halved down to rounding. That case alone could miss a range, one narrower than the looks are apart.
+ * branch by, the fate can change between turns as well: then there are more looks, and each change found is
+ * halved down to rounding. With one falling region it changes once at most and both ends tell all; with more,
+ * a range narrower than the looks are apart can be missed.
  */
 function windowsOver(
   path: Branches,
@@ -122,7 +127,7 @@ function windowsOver(
       if (flashes(min > 0 ? Math.sqrt(min) * Math.sqrt(max) : max / 2)) add(min, max)
       continue
     }
-    const places = looksBetween(min, max)
+    const places = looksBetween(min, max, path.top.length > 2 ? 24 : 1)
     let from = min
     let inside = flashes(places[0] as number)
     for (let n = 1; n < places.length; n++) {
@@ -137,7 +142,22 @@ function windowsOver(
     }
     if (inside) add(from, max)
   }
-  return found.filter((window) => window.max > window.min * narrowest)
+  return movingLandings ? found.filter((window) => window.max > window.min * narrowest) : found
+}
+
+/**
+ * Current, A, of which the load line must leave less at the first valley: the valley's own, or less still
+ * if the recovery is to keep up.
+ */
+export function mostAtValley(path: Branches, pace: Pace): number {
+  const low = valleyLevel(path, 1)
+  const valley = path.current[path.bottom[1] as number] as number
+  if (pace.recoveryTime === 0) return valley
+  const landing = currentOn(path, pieceAt(path, 0, low), low)
+  return Math.min(
+    valley,
+    landing + (pace.capacitance * (topLevel(path, 0) - low)) / pace.recoveryTime,
+  )
 }
 
 /**
@@ -150,12 +170,7 @@ function plainResistanceWindows(path: Branches, pace: Pace): Window[] {
   const strike = topLevel(path, 0)
   const low = valleyLevel(path, 1)
   if (topLevel(path, 1) < strike || voltage <= strike) return []
-  let most = path.current[path.bottom[1] as number] as number
-  if (pace.recoveryTime > 0) {
-    const landing = currentOn(path, pieceAt(path, 0, low), low)
-    most = Math.min(most, landing + (pace.capacitance * (strike - low)) / pace.recoveryTime)
-  }
-  const min = resistanceThrough(voltage, leakage, low, most)
+  const min = resistanceThrough(voltage, leakage, low, mostAtValley(path, pace))
   const knee = path.current[path.top[0] as number] as number
   const max = resistanceThrough(voltage, leakage, strike, knee)
   return max > min ? [{ min, max }] : []
@@ -186,6 +201,38 @@ export function supplyWindows(path: Branches, pace: Pace): Window[] {
   )
   const lineAt = (voltage: number): LoadLine => ({ voltage, resistance, leakage })
   return windowsOver(path, turns, (value) => ({ ...pace, line: lineAt(value) }))
+}
+
+/** Capacitance, F, with which a wait carries the strike just to `target` V; zero where none carries it so far. */
+function waitCapacitance(path: Branches, pace: Pace, branch: number, target: number): number {
+  if (pace.wait === null) return 0
+  const start = topLevel(path, branch)
+  const link = 1 / pace.line.resistance + pace.line.leakage
+  const current = path.current[path.top[branch] as number] as number
+  const part = ((target - start) * link) / (loadCurrent(pace.line, start) - current)
+  return part > 0 && part < 1 ? (pace.wait() * link) / -Math.log1p(-part) : 0
+}
+
+/**
+ * Ranges of the capacitance, F, within which the stage flashes with this load line. The load line stays, so
+ * only recovery and strike delay can turn it; `max` is `Infinity` where more capacitance never stops it.
+ */
+export function capacitanceWindows(path: Branches, pace: Pace): Window[] {
+  const turns = [pace.capacitance]
+  for (let k = 0; k < path.top.length; k++) {
+    for (let other = k + 1; other < path.top.length; other++) {
+      turns.push(waitCapacitance(path, pace, k, topLevel(path, other)))
+    }
+    if (k === 0) continue
+    const lands = landingBelow(path, k)
+    const least = recoveryCapacitance(path, pace.line, pace.recoveryTime, k, lands)
+    // With many times the least, the lamp has recovered long before it strikes.
+    turns.push(least, 50 * least)
+  }
+  const windows = windowsOver(path, turns, (capacitance) => ({ ...pace, capacitance }))
+  const last = windows.at(-1)
+  if (last === undefined || last.max <= Math.max(...turns)) return windows
+  return [...windows.slice(0, -1), { min: last.min, max: Number.POSITIVE_INFINITY }]
 }
 
 /** The window that holds a value, else the nearest by ratio; null of none. */

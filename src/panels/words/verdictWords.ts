@@ -4,7 +4,7 @@ import { type Change, formatQuantity, type Solution, type Stage } from '../../co
 export type VerdictWords = {
   /** The verdict's own words, e.g. "Flashes". */
   readonly verdict: string
-  /** The rest of the sentence. */
+  /** The rest of the sentence, with what joins it to the verdict: a space or a colon. */
   readonly sentence: string
   /** What to change, how far from the edge, or what to mind; may be empty. */
   readonly advice: string
@@ -36,31 +36,31 @@ function sentenceFor(stage: Stage, solution: Solution): string {
       if (cycle === null) return ''
       const swing = `the capacitor swings between ${volts(cycle.lowVoltage)} and ${volts(cycle.highVoltage)}`
       return cycle.frequency >= 1
-        ? `${rate(cycle.frequency)}, every ${formatQuantity(cycle.period, 's')}; ${swing}.`
-        : `once every ${formatQuantity(cycle.period, 's')}; ${swing}.`
+        ? ` ${rate(cycle.frequency)}, every ${formatQuantity(cycle.period, 's')}; ${swing}.`
+        : ` once every ${formatQuantity(cycle.period, 's')}; ${swing}.`
     }
     case 'supply below strike':
       return stage.supplyVoltage === reason.strike?.voltage
-        ? `the supply’s ${volts(stage.supplyVoltage)} only just reaches strike voltage.`
-        : `the supply’s ${volts(stage.supplyVoltage)} does not reach the ${strikeAt} at which the lamp strikes.`
+        ? `: the supply’s ${volts(stage.supplyVoltage)} only just reaches strike voltage.`
+        : `: the supply’s ${volts(stage.supplyVoltage)} does not reach the ${strikeAt} at which the lamp strikes.`
     case 'leakage holds it below strike':
-      return `with ${ohms(stage.leakageResistance)} of leakage the capacitor gets no further than ${volts(dark?.capacitorVoltage ?? 0)}; the lamp strikes at ${strikeAt}.`
+      return `: with ${ohms(stage.leakageResistance)} of leakage the capacitor gets no further than ${volts(dark?.capacitorVoltage ?? 0)}; the lamp strikes at ${strikeAt}.`
     case 'too little current at the knee':
-      return `at ${strikeAt} only ${amps(Math.max(0, reason.currentAtStrike))} is left for the lamp, which takes ${amps(strike?.current ?? 0)} there before it strikes.`
+      return `: at ${strikeAt} only ${amps(Math.max(0, reason.currentAtStrike))} is left for the lamp, which takes ${amps(strike?.current ?? 0)} there before it strikes.`
     case 'too much current at the valley':
-      return `at ${amps(lit?.current ?? 0)}: at ${outAt} it would go out, but ${amps(reason.currentAtExtinction)} flows there, more than the ${amps(extinction?.current ?? 0)} below which it does.`
+      return ` at ${amps(lit?.current ?? 0)}: at ${outAt} it would go out, but ${amps(reason.currentAtExtinction)} flows there, more than the ${amps(extinction?.current ?? 0)} below which it does.`
     case 'cannot recover':
-      return `at ${amps(lit?.current ?? 0)}: it never lets go, because ${formatQuantity(solution.capacitance, 'F')} charges faster than its strike voltage comes back (recovery time ${formatQuantity(stage.lamp.recoveryTime, 's')}).`
+      return ` at ${amps(lit?.current ?? 0)}: it never lets go, because ${formatQuantity(solution.capacitance, 'F')} charges faster than its strike voltage comes back (recovery time ${formatQuantity(stage.lamp.recoveryTime, 's')}).`
     case 'no falling region':
       return stage.leadResistance > 0
-        ? `with ${ohms(stage.leadResistance)} in its lead the lamp has no falling region left, so it cannot flash.`
-        : 'this characteristic has no falling region, so it cannot flash.'
+        ? `: with ${ohms(stage.leadResistance)} in its lead the lamp has no falling region left, so it cannot flash.`
+        : ': this characteristic has no falling region, so it cannot flash.'
     case 'two rests':
-      return `it can rest dark at ${volts(dark?.capacitorVoltage ?? 0)} and lit at ${amps(lit?.current ?? 0)}, and stays as it was put; from switch-on it stays dark.`
+      return `: it can rest dark at ${volts(dark?.capacitorVoltage ?? 0)} and lit at ${amps(lit?.current ?? 0)}, and stays as it was put; from switch-on it stays dark.`
     case 'strike beyond the data':
     case 'current beyond the data': {
       const last = stage.lamp.knots.at(-1)
-      return `${reason.code === 'strike beyond the data' ? `when it strikes at ${strikeAt},` : `through ${series},`} more flows than the ${amps(last?.current ?? 0)} where the characteristic ends. Treat it as an arc: it destroys the lamp.`
+      return `: ${reason.code === 'strike beyond the data' ? `when it strikes at ${strikeAt},` : `through ${series},`} more flows than the ${amps(last?.current ?? 0)} where the characteristic ends. Treat it as an arc: it destroys the lamp.`
     }
   }
 }
@@ -102,7 +102,11 @@ function adviceFor(stage: Stage, solution: Solution): string {
       )
     }
   } else if (reason.remedies.length > 0) {
-    sentences.push(`It would flash ${remedyWords(reason.remedies)}.`)
+    sentences.push(
+      strayOnly
+        ? `To flash it needs a capacitor, ${remedyWords(reason.remedies)}.`
+        : `It would flash ${remedyWords(reason.remedies)}.`,
+    )
   } else if (reason.code !== 'no falling region') {
     sentences.push('No single change of supply or series resistor makes this one flash.')
   }
