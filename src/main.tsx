@@ -1,7 +1,8 @@
 import { StrictMode } from 'react'
 import { createRoot } from 'react-dom/client'
 import { App } from './panels/App'
-import { sharing, startSharing } from './panels/startSharing'
+import { startSharing } from './panels/startSharing'
+import { designStore } from './state/useDesign'
 import { look } from './state/viewStore'
 import '@fontsource/source-sans-3/greek-400.css'
 import '@fontsource/source-sans-3/greek-600.css'
@@ -20,11 +21,18 @@ if (window.matchMedia('(prefers-reduced-motion: reduce)').matches) look({ runnin
 
 const root = document.getElementById('root')
 if (root === null) throw new Error('The page has no place to draw in.')
-// Drawn once the design is known, so that no other one flashes up first.
-await startSharing()
-createRoot(root).render(
-  <StrictMode>
-    <App />
-  </StrictMode>,
-)
-window.setTimeout(() => void sharing(), 1000)
+const draw = () =>
+  createRoot(root).render(
+    <StrictMode>
+      <App />
+    </StrictMode>,
+  )
+// Drawn once the design is known, so that no other one flashes up first. Not awaited here: what is loaded then
+// needs this module complete.
+void startSharing()
+  .catch(() =>
+    designStore
+      .getState()
+      .say('Links and files cannot be opened or saved: part of this page did not load. Reload it.'),
+  )
+  .finally(draw)

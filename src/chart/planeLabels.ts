@@ -209,15 +209,17 @@ function lampLabel({ path, x, y, kind }: PlaneInput): Label {
   if (endX > right) {
     const bottom = path.bottom.at(-1) ?? 0
     const levelAtEdge = y.place(path.level[bottom] ?? 0)
-    const text = `glow branch runs on to ${formatQuantity(end, 'A')} at ${formatQuantity(path.level[last] ?? 0, 'V')} →`
+    const text = `glow branch, on to ${formatQuantity(end, 'A')} at ${formatQuantity(path.level[last] ?? 0, 'V')} →`
     return {
       id: 'lamp-name',
       text,
-      places: [-10, 20, -28, 38, -46, 56, -64, 76, -82, 94, 112, 130, 148].map((lift) => ({
-        x: right - 6,
-        y: levelAtEdge + lift,
-        anchor: 'end' as const,
-      })),
+      places: Array.from({ length: 26 }, (_, k) => (k % 2 ? 16 + 9 * k : -10 - 9 * k)).map(
+        (lift) => ({
+          x: right - 6,
+          y: levelAtEdge + lift,
+          anchor: 'end' as const,
+        }),
+      ),
     }
   }
   const from = path.bottom.at(-1) ?? 0

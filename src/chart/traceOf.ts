@@ -18,7 +18,7 @@ export type Trace = {
   readonly loop: { readonly from: number; readonly to: number } | null
 }
 
-const pointsInside = 24
+const pointsInside = 56
 
 /** An endless approach to a rest is drawn for this many time constants. */
 const patience = 6

@@ -28,8 +28,12 @@ function mayHoldDesign(): boolean {
  * keeps design and address in step.
  */
 export async function startSharing(): Promise<void> {
+  listen()
   if (mayHoldDesign()) (await sharing()).openFirst()
+  else window.setTimeout(() => void sharing(), 1000)
+}
 
+function listen(): void {
   let timer = 0
   const write = () => {
     timer = 0

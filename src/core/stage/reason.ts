@@ -64,7 +64,6 @@ export type Setting = {
   readonly fate: Fate
   readonly sourceResistance: number
   readonly seriesResistance: number
-  readonly leadResistance: number
   /** Lead resistance, Ω, below which the stage would flash, asked where this one leaves no glow branch. */
   readonly leadNeeded: number | null
   readonly window: Window | null

@@ -96,7 +96,6 @@ export function solveStage(stage: Stage): Solution {
         fate,
         sourceResistance: stage.sourceResistance,
         seriesResistance: stage.seriesResistance,
-        leadResistance: stage.leadResistance,
         leadNeeded: path.top.length < 2 ? leadNeeded(lamp.knots, pace, stage.leadResistance) : null,
         window,
         leastCapacitance,
