@@ -109,7 +109,7 @@ export function Plate(props: {
     () => linearAxis(seconds, [layout.trace.x, layout.trace.x + layout.trace.width], 80),
     [seconds, layout],
   )
-  const amps = held?.amps ?? ([0, 1.12 * Math.max(highestCurrent(trace), 1e-12)] as const)
+  const amps = held?.amps ?? ([0, 1.12 * Math.max(highestCurrent(trace), 1e-9)] as const)
   const current = useMemo(() => upward(amps, layout.current, 30), [amps, layout])
 
   const input = useMemo(

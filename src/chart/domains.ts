@@ -1,9 +1,17 @@
-import { type Branches, equivalentSource, loadLineOf, type Solution, type Stage } from '../core'
+import {
+  type Branches,
+  equivalentSource,
+  kneeIndexOf,
+  loadLineOf,
+  type Solution,
+  type Stage,
+} from '../core'
 import type { CurrentAxis, Domain } from './axes'
 
 /** Voltage axis that shows supply, strike voltage and what the flash needs, V. */
 export function voltageDomain(stage: Stage, path: Branches): Domain {
-  const strike = path.level[path.top[0] ?? 0] ?? 0
+  const knee = kneeIndexOf(stage.lamp.knots)
+  const strike = knee === null ? 0 : (path.level[knee] ?? 0)
   const highest = Math.max(stage.supplyVoltage, strike)
   // The far end of the glow branch may be steep (a lead resistor): it is shown as far as it matters.
   const end = Math.min(path.level.at(-1) ?? 0, 1.25 * highest)

@@ -3,7 +3,7 @@ export type Label = {
   readonly id: string
   readonly text: string
   readonly places: readonly Place[]
-  /** Left out when none of its places is free; else it takes the first regardless. */
+  /** Left out where each of its places touches a curve; else only where each touches another name. */
   readonly optional?: boolean
 }
 
@@ -44,28 +44,29 @@ const overlap = (a: Rectangle, b: Rectangle) =>
 
 /**
  * Gives each label the first of its places that lies within `bounds` and touches no label placed before it
- * and none of the `taken` rectangles. Earlier labels matter more.
+ * and none of the `taken` rectangles; one that is not optional may touch the latter. Earlier labels matter more.
  */
 export function placeLabels(
   labels: readonly Label[],
   bounds: Rectangle,
   taken: readonly Rectangle[] = [],
 ): PlacedLabel[] {
-  const used: Rectangle[] = [...taken]
+  const inside = (box: Rectangle) =>
+    box.left >= bounds.left &&
+    box.right <= bounds.right &&
+    box.top >= bounds.top &&
+    box.bottom <= bounds.bottom
+  const names: Rectangle[] = []
   const placed: PlacedLabel[] = []
   for (const { id, text, places, optional } of labels) {
-    const inside = (box: Rectangle) =>
-      box.left >= bounds.left &&
-      box.right <= bounds.right &&
-      box.top >= bounds.top &&
-      box.bottom <= bounds.bottom
-    const free = places.find((place) => {
-      const box = labelBox(text, place)
-      return inside(box) && !used.some((other) => overlap(box, other))
-    })
-    const place = free ?? (optional ? undefined : places.find((p) => inside(labelBox(text, p))))
+    const fitting = places.filter((place) => inside(labelBox(text, place)))
+    const clearOf = (others: readonly Rectangle[]) => (place: Place) =>
+      !others.some((other) => overlap(labelBox(text, place), other))
+    const clear = fitting.filter(clearOf(names))
+    // A name that must stand may cross a curve, never another name.
+    const place = clear.find(clearOf(taken)) ?? (optional ? undefined : clear[0])
     if (place === undefined) continue
-    used.push(labelBox(text, place))
+    names.push(labelBox(text, place))
     placed.push({ id, text, ...place })
   }
   return placed

@@ -78,6 +78,11 @@ export function planeLabels(input: PlaneInput, picture: PlanePicture): PlaneLabe
     places: [
       { x: left + 18, y: openY - 9, anchor: 'start' },
       { x: left + 18, y: openY + 18, anchor: 'start' },
+      ...[-26, -44, 36, 54].map((lift) => ({
+        x: left + 18,
+        y: openY + lift,
+        anchor: 'start' as const,
+      })),
     ],
   })
 

@@ -53,7 +53,7 @@ export function PlayBar(props: {
           }}
         >
           <option value="auto">
-            {chosen === null ? `${speedWords(props.speed)}, to suit` : 'speed to suit'}
+            {chosen === null ? `auto: ${speedWords(props.speed)}` : 'auto'}
           </option>
           {speeds.map((speed) => (
             <option key={speed} value={String(speed)}>

@@ -1,7 +1,7 @@
 import { useRef } from 'react'
 import { CircuitDrawing } from '../chart/CircuitDrawing'
 import { steppedPart } from '../chart/handles'
-import { designLimits } from '../io/designLimits'
+import { designLimits, textLimits } from '../io/designLimits'
 import { designStore, useDesign } from '../state/useDesign'
 import { look, useView } from '../state/viewStore'
 import { Choice } from './parts/Choice'
@@ -12,6 +12,7 @@ const infinity = Number.POSITIVE_INFINITY
 /** The circuit drawn, and a field for each of its parts. */
 export function StagePanel() {
   const stage = useDesign((state) => state.design.stage)
+  const note = useDesign((state) => state.design.note)
   const lampName = useDesign((state) => state.design.lampName)
   const choice = useView((view) => view.choice)
   const panel = useRef<HTMLElement>(null)
@@ -109,6 +110,18 @@ export function StagePanel() {
         ]}
         onChoose={(value) => look({ choice: value })}
       />
+      <div className="field note">
+        <label htmlFor="design-note">Note</label>
+        <textarea
+          id="design-note"
+          rows={3}
+          maxLength={textLimits.note.most}
+          value={note}
+          onFocus={() => designStore.getState().beginDrag()}
+          onBlur={() => designStore.getState().endDrag()}
+          onChange={(event) => change({ note: event.currentTarget.value })}
+        />
+      </div>
     </section>
   )
 }

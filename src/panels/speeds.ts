@@ -19,7 +19,7 @@ export function speedFor(period: number): number {
 /** A speed in words. */
 export function speedWords(speed: number): string {
   if (speed === 1) return 'real speed'
-  return speed > 1 ? `${speed} × faster` : `${Math.round(1 / speed).toLocaleString('en')} × slower`
+  return speed > 1 ? `${speed} × real` : `1/${Math.round(1 / speed)} of real`
 }
 
 /** The corner next to a time, s: ends of the phases, going up or down; the outermost at the ends. */

@@ -7,7 +7,10 @@ export function useUndoKeys(): void {
     const press = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.altKey) return
       const target = event.target
-      if (target instanceof HTMLElement && target.matches('[data-typing], .title, #lamp-name'))
+      if (
+        target instanceof HTMLElement &&
+        target.matches('[data-typing], .title, #lamp-name, #design-note')
+      )
         return
       const key = event.key.toLowerCase()
       const again = key === 'y' || (key === 'z' && event.shiftKey)
