@@ -34,6 +34,8 @@ export default defineConfig({
   },
   test: {
     include: ['tests/**/*.test.{ts,tsx}'],
+    // Properties try many cases; on a busy machine that takes its time.
+    testTimeout: 60_000,
     coverage: { provider: 'v8', include: ['src/**'], reportsDirectory: '.reports/coverage' },
   },
 })

@@ -32,7 +32,7 @@ export const designLimits: Readonly<Record<DesignNumber, Limit>> = {
   sourceResistance: { words: 'source resistance', unit: 'Ω', least: 0, most: 1e13 },
   seriesResistance: { words: 'series resistor', unit: 'Ω', least: 0, most: 1e13 },
   capacitance: { words: 'capacitor', unit: 'F', least: 0, most: 1 },
-  leakageResistance: { words: 'leakage', unit: 'Ω', least: 0, aboveLeast: true, most: 1e13 },
+  leakageResistance: { words: 'leakage', unit: 'Ω', least: 1e-6, aboveLeast: true, most: 1e13 },
   leadResistance: { words: 'lead resistor', unit: 'Ω', least: 0, most: 1e13 },
   strayCapacitance: {
     words: 'stray capacitance',

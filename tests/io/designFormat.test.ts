@@ -76,7 +76,7 @@ describe('the format of a design', () => {
     [
       'design.stage.leakageResistance',
       0,
-      'must be a number above 0 Ω and up to 10 TΩ, or none; here it is 0 Ω.',
+      'must be a number above 1 µΩ and up to 10 TΩ, or none; here it is 0 Ω.',
     ],
     ['design.stage.leakageResistance', Number.POSITIVE_INFINITY, 'here it is ∞ Ω.'],
     ['design.stage.strayCapacitance', 1e-5, 'The stray capacitance must be'],
@@ -118,7 +118,7 @@ describe('the format of a design', () => {
       ['design.stage.supplyVoltage', 20e3],
       ['design.stage.capacitance', 0],
       ['design.stage.leakageResistance', 1e13],
-      ['design.stage.leakageResistance', Number.MIN_VALUE],
+      ['design.stage.leakageResistance', 1.01e-6],
       ['design.stage.leakageResistance', null],
       ['design.stage.strayCapacitance', 1e-6],
       ['design.title', 'x'.repeat(80)],
