@@ -36,16 +36,19 @@ export function linearAxis(domain: Domain, range: Domain, spacing: number): Axis
   }
 }
 
-/** A logarithmic axis: a label at each decade (or every few), thin lines between. `domain` above 0. */
+/**
+ * A logarithmic axis: a label at each decade (or every few), thin lines between. Over few decades 2 and 5 are
+ * labelled too, over less than one the numbers of an even axis, as far as there is room. `domain` above 0.
+ */
 export function logarithmicAxis(domain: Domain, range: Domain, spacing: number): Axis {
   const scale = scaleLog(domain, range)
   const decades = Math.log10(domain[1] / domain[0])
   const room = Math.abs(range[1] - range[0]) / Math.max(decades, 1e-9)
   const step = Math.max(1, Math.ceil(spacing / room))
-  const ticks: Tick[] = []
-  if (decades < 1.2) {
+  const candidates: (Tick & { readonly rank: number })[] = []
+  if (decades < 0.7) {
     for (const value of scaleLinear(domain, range).ticks(4)) {
-      if (value > 0) ticks.push({ value, at: scale(value), labelled: true })
+      candidates.push({ value, at: scale(value), labelled: false, rank: 1 })
     }
   } else {
     for (let power = Math.floor(Math.log10(domain[0])); 10 ** power <= domain[1]; power++) {
@@ -58,16 +61,28 @@ export function logarithmicAxis(domain: Domain, range: Domain, spacing: number):
           (digit > 1 && (room < 26 || (room < 110 && digit !== 2 && digit !== 5)))
         )
           continue
-        ticks.push({
-          value,
-          at: scale(value),
-          minor: digit > 1,
-          labelled: digit === 1 && (((power % step) + step) % step === 0 || step === 1),
-        })
+        const rank = digit === 2 || digit === 5 ? 2 : digit === 1 && power % step === 0 ? 1 : 3
+        candidates.push({ value, at: scale(value), minor: digit > 1, labelled: false, rank })
       }
     }
   }
+  const ticks = withLabels(candidates, 0.75 * spacing)
   return { domain, range, place: (value) => scale(value), value: (at) => scale.invert(at), ticks }
+}
+
+/** Labels ticks of the first rank; those of the second where these are fewer than three; none too near another. */
+function withLabels(ticks: readonly (Tick & { readonly rank: number })[], near: number): Tick[] {
+  const chosen: number[] = []
+  const choose = (rank: number) => {
+    for (const tick of ticks) {
+      if (tick.rank === rank && chosen.every((at) => Math.abs(at - tick.at) >= near)) {
+        chosen.push(tick.at)
+      }
+    }
+  }
+  choose(1)
+  if (chosen.length < 3) choose(2)
+  return ticks.map(({ rank, ...tick }) => ({ ...tick, labelled: chosen.includes(tick.at) }))
 }
 
 /** The current axis of the plane, either way. A logarithmic one has no zero: lesser values stand at its left end. */
@@ -92,12 +107,19 @@ export function shift(axis: Axis, kind: CurrentAxis, distance: number): Domain {
   return orderly([axis.value(from - distance), axis.value(to - distance)], kind)
 }
 
+/** Ends beyond which no axis is moved: past every voltage, current and time a stage can have. */
+const furthest = 1e18
+const leastCurrent = 1e-18
+const mostCurrent = 1e4
+
 /** Keeps a zoom within what numbers and eyes can tell apart. */
 function orderly([from, to]: Domain, kind: CurrentAxis): Domain {
   if (kind === 'logarithmic') {
-    const low = Math.max(from, 1e-18)
-    return [low, Math.max(to, low * 1.05)]
+    const low = Math.min(Math.max(from, leastCurrent), mostCurrent / 10)
+    return [low, Math.min(Math.max(to, low * 1.05), mostCurrent)]
   }
-  const least = Math.max(1e-15, Math.abs(to) * 1e-9)
-  return to - from > least ? [from, to] : [from, from + least]
+  const low = Math.min(Math.max(from, -furthest), furthest)
+  const high = Math.min(Math.max(to, -furthest), furthest)
+  const least = Math.max(1e-15, Math.max(Math.abs(low), Math.abs(high)) * 1e-9)
+  return high - low > least ? [low, high] : [low, low + least]
 }

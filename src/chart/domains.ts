@@ -19,8 +19,8 @@ export function voltageDomain(stage: Stage, path: Branches): Domain {
 }
 
 /**
- * Current axis of the plane, A. Logarithmic: from below the pre-strike current (10 nA or less) to beyond the
- * characteristic. Linear: to 1.6 times what the load line allows.
+ * Current axis of the plane, A. Logarithmic: from below the pre-strike current (10 nA or less) and what the load
+ * line allows to beyond the characteristic. Linear: to 1.6 times what the load line allows.
  */
 export function planeDomain(kind: CurrentAxis, stage: Stage, path: Branches): Domain {
   const last = path.current.at(-1) ?? 1e-3
@@ -32,7 +32,9 @@ export function planeDomain(kind: CurrentAxis, stage: Stage, path: Branches): Do
     return [0, Math.min(most, 3 * last)]
   }
   const knee = path.current[path.top[0] ?? 0] ?? 1e-7
-  const low = Math.max(1e-15, Math.min(1e-8, knee / 5))
+  // A load line that passes less than all this would lie out of sight.
+  const least = Math.min(1e-8, knee / 5, short > 0 ? short / 10 : 1e-8)
+  const low = Math.max(1e-16, least)
   return [low, Math.max(3 * last, low * 100)]
 }
 

@@ -11,7 +11,7 @@ import {
   type Stage,
 } from '../core'
 import type { Axis } from './axes'
-import { slopeHandle } from './planePicture'
+import { slopeHandle, slopeLevelThrough } from './planePicture'
 
 /** What can be grabbed on the plane. */
 export type HandleId = 'supply' | 'slope' | `knot-${number}`
@@ -96,10 +96,18 @@ export function tidy(value: number, step: number): number {
   const lead = step / 10 ** power
   const unit = lead >= 5 ? 5 : lead >= 2 ? 2 : 1
   const count = Math.round(value / (unit * 10 ** power))
+  // Finer than a number can say.
+  if (!(Math.abs(count) < 1e15)) return value
   return Number(`${count * unit}e${power}`)
 }
 
 const toFigures = (value: number, figures: number) => Number(value.toPrecision(figures))
+
+/** Three figures of a value above 0, or as many more as it takes to miss it by less than half of `step`. */
+function toFiguresWithin(value: number, step: number): number {
+  const needed = Math.floor(Math.log10(value)) + 1 - Math.floor(Math.log10(step))
+  return toFigures(value, Math.min(15, Math.max(3, needed)))
+}
 
 /** What a handle means where it is put: `at` in px on the plane. Null where it cannot go. */
 export function placeHandle(
@@ -116,31 +124,39 @@ export function placeHandle(
     return { kind: 'supply', voltage: Math.min(20e3, Math.max(0, voltage)) }
   }
   const current = x.value(Math.max(x.range[0] + 0.5, Math.min(x.range[1], at.x)))
+  const besides = x.value(x.place(current) + 1)
   if (id === 'slope') {
-    const { level } = slopeHandle(line, x, y)
-    return seriesThrough(stage, level, current, choice)
+    return seriesThrough(stage, slopeLevelThrough(line, y, current), current, choice, besides)
   }
   const index = knotOf(id)
-  const tidyCurrent = toFigures(current, 3)
+  const tidyCurrent = toFiguresWithin(current, besides - current)
   const level = Math.max(0, y.value(at.y))
   const voltage = Math.max(0, tidy(level - stage.leadResistance * tidyCurrent, pixel))
   return { kind: 'knot', index, knot: { current: tidyCurrent, voltage } }
 }
 
-/** The series resistance that takes the load line through a point of the plane, kept to preferred values. */
+/**
+ * The series resistance that takes the load line through a point of the plane, kept to preferred values or else
+ * to three figures; to more, if `besides` is given, where three would miss the point by as much as that current.
+ */
 export function seriesThrough(
   stage: Stage,
   level: number,
   current: number,
   choice: PartChoice,
+  besides?: number,
 ): Edit | null {
   const leakage = 1 / stage.leakageResistance
   const total = resistanceThrough(stage.supplyVoltage, leakage, level, current)
   const series = total - stage.sourceResistance
   if (!(series > 0 && Number.isFinite(series))) return null
   const kept = Math.min(1e13, Math.max(1, series))
+  const step =
+    besides === undefined
+      ? kept
+      : total - resistanceThrough(stage.supplyVoltage, leakage, level, besides)
   const resistance =
-    choice === 'any' ? toFigures(kept, 3) : (nearestPreferred(kept, choice) ?? kept)
+    choice === 'any' ? toFiguresWithin(kept, step) : (nearestPreferred(kept, choice) ?? kept)
   return { kind: 'series', resistance }
 }
 

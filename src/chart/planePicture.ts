@@ -82,7 +82,7 @@ export function planePicture(input: PlaneInput): PlanePicture {
           )
         : '',
     loadLine: text(loadLinePoints(own, kind, x.domain)),
-    region: dark.length > 0 ? `${text(regionPoints(dark, lit, x, y))}Z` : '',
+    region: dark.length > 0 ? `${text(regionPoints(dark, lit, x, own.voltage))}Z` : '',
     litEdge: text(lit),
     darkEdge: text(dark),
     ...loopOf(solution, input, text),
@@ -114,18 +114,20 @@ export function edgeLines(
   return { lit: window.min > 0 ? at(window.min) : null, dark: at(window.max) }
 }
 
-/** The band between two load lines: down one, and back up the other or along the right end. */
+/**
+ * The band between two load lines: down one, and back up the other. Without the other it ends where load lines
+ * of less and less resistance do: at the right end of the axis, and at the supply voltage.
+ */
 function regionPoints(
   dark: readonly PlanePoint[],
   lit: readonly PlanePoint[],
   x: Axis,
-  y: Axis,
+  supply: number,
 ): PlanePoint[] {
   const back = [...lit].reverse()
   if (back.length > 0) return [...dark, ...back]
-  const right = x.domain[1]
-  const top = dark[0]?.[1] ?? y.domain[1]
-  return [...dark, [right, 0], [right, top]]
+  const [left, right] = x.domain
+  return [...dark, [right, 0], [right, supply], [left, supply]]
 }
 
 /** The loop: along the branches in time, across them in no time. */
@@ -169,12 +171,24 @@ function phasePoints(phase: Phase, path: Branches, kind: CurrentAxis, x: Axis): 
   return stretchPoints(path, piece, kind, x.domain, phase.from, phase.to)
 }
 
+/** Where the handle for the load line's slope stands, in parts of what the source gives with no current. */
+const slopeShare = 0.3
+
 /** Level at which the handle for the load line's slope stands, V: well down it, and in sight. */
 export function slopeHandleLevel(line: LoadLine, voltage: Axis): number {
   const { voltage: open } = equivalentSource(line)
   const [low, high] = voltage.domain
   const room = high - low
-  return Math.max(low + 0.06 * room, Math.min(0.3 * open, high - 0.1 * room))
+  return Math.max(low + 0.06 * room, Math.min(slopeShare * open, high - 0.1 * room))
+}
+
+/**
+ * That level once the load line is turned to pass `current` A there. Leakage makes it move with the resistance:
+ * at its share of the open voltage a load line passes the rest of what the supply gives through that resistance.
+ */
+export function slopeLevelThrough(line: LoadLine, voltage: Axis, current: number): number {
+  const resistance = ((1 - slopeShare) * line.voltage) / current
+  return slopeHandleLevel({ ...line, resistance }, voltage)
 }
 
 /** Place of that handle, px, held within the plot. */

@@ -18,7 +18,9 @@ export type Trace = {
   readonly loop: { readonly from: number; readonly to: number } | null
 }
 
+/** Points inside each phase, and in all: the light is drawn there and back, so it has twice as many. */
 const pointsInside = 56
+const pointsInAll = 1000
 
 /** An endless approach to a rest is drawn for this many time constants. */
 const patience = 6
@@ -43,10 +45,11 @@ export function traceOf(stage: Stage, solution: Solution, span: Span): Trace {
   } else {
     phases = [...cycle.phases, ...cycle.phases, ...cycle.phases]
   }
+  const most = Math.max(0, Math.floor(pointsInAll / phases.length) - 2)
   const length = phases.reduce((sum, phase) => sum + phase.duration, 0)
   return {
     phases,
-    moments: tracePhases(phases, feed, pointsInside),
+    moments: tracePhases(phases, feed, Math.min(pointsInside, most)),
     length,
     loop: cycle === null ? null : { from: lead, to: lead + cycle.period },
   }

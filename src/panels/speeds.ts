@@ -1,9 +1,12 @@
 /** Speeds to choose from: seconds of the stage for each second on screen. */
 export const speeds = [100, 10, 1, 0.1, 0.01, 1e-3, 1e-4, 1e-5, 1e-6] as const
 
-/** The slowest period that is still pleasant to watch, and the fastest, in screen seconds. */
+/**
+ * The slowest period that is still pleasant to watch, and the fastest, in screen seconds: at that the lamp on the
+ * page still flashes (`lampLight`).
+ */
 const slowest = 12
-const fastest = 0.35
+const fastest = 0.37
 
 /** The speed that shows a cycle at a pace an eye can follow: real where that will do. */
 export function speedFor(period: number): number {

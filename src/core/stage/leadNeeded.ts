@@ -5,12 +5,13 @@ import { bisect } from './recovery'
 
 /**
  * Lead resistance, Ω, that must not be reached if the stage is to flash, where more of it fitted has
- * straightened the falling region out; null where no smaller one makes it flash.
+ * straightened the falling region out; null where no smaller one makes it flash, or only within a hundredth,
+ * which no part can be chosen to.
  *
  * As the lead resistor shrinks, the fate can change only where a fold opens, where two knots come to the same
  * voltage at the capacitor, or where the load line passes a knot: all of them a quotient. Between two of these
- * a look in the middle settles it, taken from the present resistance downwards; only a recovery or a strike
- * delay can still move the limit a little.
+ * a look in the middle settles it, taken from the present resistance downwards. A recovery or a strike delay
+ * moves the limit in between, so then there are more looks and the change found is halved down to rounding.
  */
 export function leadNeeded(knots: readonly Knot[], pace: Pace, fitted: number): number | null {
   const { voltage, resistance, leakage } = pace.line
@@ -31,13 +32,20 @@ export function leadNeeded(knots: readonly Knot[], pace: Pace, fitted: number): 
     return path.top.length > 1 && follow(path, pace, null).kind === 'cycle'
   }
   const marks = [...turns].sort((a, b) => b - a)
+  const looks = pace.recoveryTime > 0 || pace.wait !== null ? 16 : 1
   for (let k = 0; k + 1 < marks.length; k++) {
     const high = marks[k] as number
-    const low = marks[k + 1] as number
-    const middle = low + (high - low) / 2
-    if (!flashes(middle)) continue
-    // Where a fold has only just opened the strike voltage comes back too slowly: the limit lies lower.
-    return flashes(high - (high - low) * 1e-9) ? high : bisect(middle, high, flashes)
+    const span = high - (marks[k + 1] as number)
+    let short = flashes(high - span * 1e-9) ? null : high
+    for (let n = 0; n < looks; n++) {
+      const place = high - (span * (n + 0.5)) / looks
+      if (!flashes(place)) {
+        short = place
+        continue
+      }
+      const limit = short === null ? high : bisect(place, short, flashes)
+      if (flashes(limit * 0.99)) return limit
+    }
   }
   return null
 }

@@ -126,7 +126,7 @@ function remediesFor(setting: Setting): Remedy[] {
   const offer = (cost: number, ...remedy: Change[]) => found.push({ remedy, cost })
   if (path.top.length < 2) {
     const limit = setting.leadNeeded
-    if (limit !== null) offer(0, { quantity: 'leadResistance', sense: 'at most', value: limit / 2 })
+    if (limit !== null) offer(0, { quantity: 'leadResistance', sense: 'at most', value: limit })
     return found.map(({ remedy }) => remedy)
   }
   if (window !== null) {

@@ -14,6 +14,16 @@ const volts = (value: number) => formatQuantity(value, 'V')
 const ohms = (value: number) => formatQuantity(value, 'Ω')
 const amps = (value: number) => formatQuantity(value, 'A')
 
+/** Two values to compare, with as many figures as it takes for them to read differently. */
+function apart(first: number, second: number, unit: 'V' | 'A'): readonly [string, string] {
+  for (let figures = 3; figures < 9; figures++) {
+    const written = [first, second].map((value) => formatQuantity(value, unit, figures))
+    const [one = '', other = ''] = written
+    if (one !== other) return [one, other]
+  }
+  return [formatQuantity(first, unit), formatQuantity(second, unit)]
+}
+
 /** Fastest known single-lamp oscillators, Hz [Braga, institute article min375]. */
 const fastestKnown = 20e3
 
@@ -39,16 +49,24 @@ function sentenceFor(stage: Stage, solution: Solution): string {
         ? ` ${rate(cycle.frequency)}, every ${formatQuantity(cycle.period, 's')}; ${swing}.`
         : ` once every ${formatQuantity(cycle.period, 's')}; ${swing}.`
     }
-    case 'supply below strike':
-      return stage.supplyVoltage === reason.strike?.voltage
-        ? `: the supply’s ${volts(stage.supplyVoltage)} only just reaches strike voltage.`
-        : `: the supply’s ${volts(stage.supplyVoltage)} does not reach the ${strikeAt} at which the lamp strikes.`
-    case 'leakage holds it below strike':
-      return `: with ${ohms(stage.leakageResistance)} of leakage the capacitor gets no further than ${volts(dark?.capacitorVoltage ?? 0)}; the lamp strikes at ${strikeAt}.`
-    case 'too little current at the knee':
-      return `: at ${strikeAt} only ${amps(Math.max(0, reason.currentAtStrike))} is left for the lamp, which takes ${amps(strike?.current ?? 0)} there before it strikes.`
-    case 'too much current at the valley':
-      return ` at ${amps(lit?.current ?? 0)}: at ${outAt} it would go out, but ${amps(reason.currentAtExtinction)} flows there, more than the ${amps(extinction?.current ?? 0)} below which it does.`
+    case 'supply below strike': {
+      const [supply, needed] = apart(stage.supplyVoltage, strike?.voltage ?? 0, 'V')
+      return stage.supplyVoltage === strike?.voltage
+        ? `: the supply’s ${supply} only just reaches strike voltage.`
+        : `: the supply’s ${supply} does not reach the ${needed} at which the lamp strikes.`
+    }
+    case 'leakage holds it below strike': {
+      const [reached, needed] = apart(dark?.capacitorVoltage ?? 0, strike?.voltage ?? 0, 'V')
+      return `: with ${ohms(stage.leakageResistance)} of leakage the capacitor gets no further than ${reached}; the lamp strikes at ${needed}.`
+    }
+    case 'too little current at the knee': {
+      const [left, taken] = apart(Math.max(0, reason.currentAtStrike), strike?.current ?? 0, 'A')
+      return `: at ${strikeAt} only ${left} is left for the lamp, which takes ${taken} there before it strikes.`
+    }
+    case 'too much current at the valley': {
+      const [flows, most] = apart(reason.currentAtExtinction, extinction?.current ?? 0, 'A')
+      return ` at ${amps(lit?.current ?? 0)}: at ${outAt} it would go out, but ${flows} flows there, more than the ${most} below which it does.`
+    }
     case 'cannot recover':
       return ` at ${amps(lit?.current ?? 0)}: it never lets go, because ${formatQuantity(solution.capacitance, 'F')} charges faster than its strike voltage comes back (recovery time ${formatQuantity(stage.lamp.recoveryTime, 's')}).`
     case 'no falling region':
