@@ -43,7 +43,7 @@ for (const width of [1440, 1024, 390]) {
       ['knot-1', [40, 50, -30]],
     ] as const) {
       const place = (await plane.boundingBox())!
-      const verdicts = new Set<string | null>()
+      const verdicts = new Set([await verdict(page).getAttribute('data-verdict')])
       let at = await middleOf(grabbed(page, id))
       await mouse.down(at)
       await page.evaluate(() => {

@@ -148,6 +148,7 @@ describe('a cycle with a delay', () => {
     expect(same?.period).toBe(cycleOf(stage).period)
     expect(same?.firstStrike).toBe(cycleOf(stage).firstStrike)
     expect(same?.periodDeviation).toBe(0)
+    expect(same?.meanPeriod).toBe(same?.period)
   })
 
   it('asks for one wait a strike, the first included', () => {
