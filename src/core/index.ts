@@ -1,3 +1,69 @@
+export { type CatalogueEntry, catalogue, catalogueEntry } from './lamp/catalogue'
+export { factsOf, recordOf } from './lamp/catalogueRecord'
+export { type LampUnder, lampUnder } from './lamp/conditions'
+export {
+  type ConditionEffects,
+  conditionSources,
+  defaultEffects,
+  faultInConditions,
+  type LampConditions,
+  noConditions,
+} from './lamp/conditionsDefaults'
+export {
+  currentsFromSweep,
+  type LeftOutRow,
+  type SweepCurrents,
+  type SweepReading,
+} from './lamp/currentsFromSweep'
+export { extendGlow } from './lamp/extendGlow'
+export {
+  type CharacteristicFit,
+  type FitOptions,
+  fitCharacteristic,
+} from './lamp/fitCharacteristic'
+export {
+  fittingSweep,
+  type KnotLimits,
+  type SweepFit,
+  type SweepProgress,
+} from './lamp/fitSweep'
+export { type LampDetails, typedDetails } from './lamp/lampDetails'
+export {
+  designWithLamp,
+  detailsOf,
+  lampTurned,
+  recordOfDesign,
+  type WorkingStage,
+  workingStage,
+} from './lamp/lampInDesign'
+export {
+  faultInLampRecord,
+  knotsWithoutBase,
+  type LampFact,
+  type LampOrigin,
+  type LampRecord,
+  type LampSpread,
+  lampOrigins,
+  type PlainData,
+  type Span,
+} from './lamp/lampRecord'
+export { lifeAtCurrent, peakOfAcRating } from './lamp/ratings'
+export { recordWithFit } from './lamp/recordWithFit'
+export { recordWithThresholds } from './lamp/recordWithThresholds'
+export { type RecoveryFromRate, recoveryFromRate } from './lamp/recoveryFromRate'
+export { type ReducedSweep, reduceSweep } from './lamp/reduceSweep'
+export {
+  type StrikeReading,
+  type StrikeTests,
+  type Surroundings,
+  strikeTests,
+} from './lamp/strikeTests'
+export { delaySource } from './lamp/strikeTestsDelay'
+export { type Sample, sampleSource } from './lamp/strikeTestsSample'
+export type { CommonError, Direction, SweepPoint } from './lamp/sweepPoint'
+export type { MeterPlace, SweepSetup } from './lamp/sweepSetup'
+export { type RateThresholds, thresholdsFromRates } from './lamp/thresholdsFromRates'
+export type { RateObservation, RateParts } from './lamp/thresholdsFromRatesModel'
 export { type FormatOptions, formatParts, formatQuantity } from './quantity/formatQuantity'
 export { type ParseOptions, parseQuantity } from './quantity/parseQuantity'
 export {

@@ -1,4 +1,3 @@
-import { kneeIndexOf } from './lamp'
 import { equivalentSource, loadLineOf } from './loadLine'
 import { effectiveCapacitance, type Stage } from './stage'
 
@@ -33,9 +32,7 @@ export function cautionsFor(stage: Stage): Caution[] {
   }
   if (charge > touchChargeLimit) cautions.push({ kind: 'charge', charge, voltage: open })
   if (stage.capacitance > 0 && open > touchVoltageLimit) {
-    const knee = kneeIndexOf(stage.lamp.knots)
-    const strike = knee === null ? open : (stage.lamp.knots[knee]?.voltage ?? open)
-    cautions.push({ kind: 'dark is not discharged', voltage: Math.min(open, strike) })
+    cautions.push({ kind: 'dark is not discharged', voltage: open })
   }
   return cautions
 }
