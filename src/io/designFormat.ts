@@ -1,27 +1,36 @@
 import type { Design } from '../core'
 import { format1 } from './formats/format1'
+import { format2 } from './formats/format2'
 import type { FormatReader } from './formats/formatReader'
-import { nameFormat1, packFormat1 } from './formats/writeFormat1'
+import { nameFormat2, packFormat2, type Share } from './formats/writeFormat2'
 import { type Opened, type Refused, refused } from './opened'
 
-/** The format designs are written in now. */
-export const newestFormat = 1
+/** The newest format this program reads. */
+export const newestFormat = 2
+
+/** The format a design is written in: the oldest that holds all of it, so that older pages can read it too. */
+export function formatFor(design: Design): number {
+  return design.lampDetails === undefined ? 1 : newestFormat
+}
 
 // Every format ever written stays readable: a new one adds its reader here, and readers of earlier
 // ones go on returning today's Design.
-const readers: ReadonlyMap<number, FormatReader> = new Map([[1, format1]])
+const readers: ReadonlyMap<number, FormatReader> = new Map([
+  [1, format1],
+  [2, format2],
+])
 
 /** A design as plain JSON with named fields and the number of its format. */
 export function encodeDesign(design: Design): {
   readonly format: number
   readonly design: unknown
 } {
-  return { format: newestFormat, design: nameFormat1(design) }
+  return { format: formatFor(design), design: nameFormat2(design) }
 }
 
 /** A design as short lists, for links; the format's number travels beside it. */
-export function packDesign(design: Design): unknown {
-  return packFormat1(design)
+export function packDesign(design: Design, share: Share = 'all'): unknown {
+  return packFormat2(design, share)
 }
 
 /** Reads what `encodeDesign` wrote, in any format up to the newest; anything else is refused. */

@@ -18,6 +18,7 @@ export type DesignNumber =
   | 'leakageResistance'
   | 'leadResistance'
   | 'strayCapacitance'
+  | 'baseResistance'
   | 'recoveryTime'
   | 'strikeDelay'
   | 'current'
@@ -41,6 +42,7 @@ export const designLimits: Readonly<Record<DesignNumber, Limit>> = {
     aboveLeast: true,
     most: 1e-6,
   },
+  baseResistance: { words: 'resistor in the base', unit: 'Ω', least: 0, most: 1e13 },
   recoveryTime: { words: 'recovery time', unit: 's', least: 0, most: 1000 },
   strikeDelay: { words: 'strike delay', unit: 's', least: 0, most: 1000 },
   current: { words: 'current', unit: 'A', least: 0, most: 100 },

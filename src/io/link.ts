@@ -2,12 +2,19 @@ import { deflateSync, strFromU8, strToU8 } from 'fflate'
 import type { Design } from '../core'
 import { fromBase64url, toBase64url } from './base64url'
 import { checksum } from './checksum'
-import { checkDesign, newestFormat, packDesign, readerOf, unpackDesign } from './designFormat'
+import { checkDesign, formatFor, packDesign, readerOf, unpackDesign } from './designFormat'
 import { inflateCapped } from './inflateCapped'
 import { type Opened, type Refused, refused } from './opened'
 
 /** Longest link part that is written or read, in characters, "#" included. */
 export const longestFragment = 2000
+
+/** What a link carries, and what stays behind where all is too long: all first. */
+const shares = [
+  ['all', null],
+  ['without readings', 'the lamp’s readings'],
+  ['without readings and facts', 'the lamp’s readings and what its facts rest on'],
+] as const
 
 const mostInflated = 64_000
 // Percent-encoding can make every character three.
@@ -18,17 +25,27 @@ const longestEncoded = 3 * longestFragment
  * with a sentence if the design has a number out of range, or texts so long that mail and chat
  * programs might cut the link.
  */
-export function linkFragment(
-  design: Design,
-): { readonly ok: true; readonly fragment: string } | Refused {
+export function linkFragment(design: Design):
+  | {
+      readonly ok: true
+      readonly fragment: string
+      /** What did not fit and stays behind, in words; null of nothing. */
+      readonly leftOut: string | null
+    }
+  | Refused {
   const checked = checkDesign(design)
   if (!checked.ok) return checked
-  const json = strToU8(JSON.stringify(packDesign(checked.design)))
-  const data = deflateSync(json, { level: 9 })
-  const fragment = `#${newestFormat}.${checksumOf(newestFormat, data)}.${toBase64url(data)}`
-  if (fragment.length <= longestFragment) return { ok: true, fragment }
+  const format = formatFor(checked.design)
+  let length = 0
+  for (const [share, leftOut] of shares) {
+    const json = strToU8(JSON.stringify(packDesign(checked.design, share)))
+    const data = deflateSync(json, { level: 9 })
+    const fragment = `#${format}.${checksumOf(format, data)}.${toBase64url(data)}`
+    if (fragment.length <= longestFragment) return { ok: true, fragment, leftOut }
+    length = fragment.length
+  }
   return refused(
-    `The link would be ${fragment.length} characters long, and beyond ${longestFragment} mail and ` +
+    `The link would be ${length} characters long, and beyond ${longestFragment} mail and ` +
       'chat programs may cut it: shorten the note, or save a file instead.',
   )
 }

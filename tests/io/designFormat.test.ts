@@ -129,7 +129,7 @@ describe('the format of a design', () => {
 
   it('tells a newer format apart from none at all', () => {
     expect(messageOf({ format: 7, design: {} })).toBe(
-      'It was made by a newer Glowloop: format 7, this one reads up to 1.',
+      'It was made by a newer Glowloop: format 7, this one reads up to 2.',
     )
     for (const format of [0, -1, 1.5, '1', null, undefined]) {
       expect(messageOf(withField('format', format))).toContain('in which format')

