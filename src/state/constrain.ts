@@ -1,4 +1,13 @@
-import { type Design, faultInKnots, type Knot, type Lamp, type Stage } from '../core'
+import {
+  type Design,
+  detailsOf,
+  faultInConditions,
+  faultInKnots,
+  type Knot,
+  type Lamp,
+  type LampDetails,
+  type Stage,
+} from '../core'
 import { type DesignNumber, designLimits, knotCount, textLimits } from '../io/designLimits'
 
 /**
@@ -42,6 +51,21 @@ export function constrainDesign(wanted: Design, before: Design): Design {
     note: cut(wanted.note, textLimits.note.most),
     lampName: cut(wanted.lampName, textLimits.lampName.most),
     stage: constrainStage(wanted.stage, before.stage),
+    ...(wanted.lampDetails === undefined
+      ? {}
+      : { lampDetails: constrainDetails(wanted.lampDetails, detailsOf(before)) }),
+  }
+}
+
+/** Details of a lamp with its texts cut; what is impossible stays as before. */
+function constrainDetails(wanted: LampDetails, before: LampDetails): LampDetails {
+  const { otherWay, conditions } = wanted
+  return {
+    ...wanted,
+    note: cut(wanted.note, textLimits.note.most),
+    baseResistance: constrainNumber('baseResistance', wanted.baseResistance, before.baseResistance),
+    otherWay: otherWay === null || problemWithKnots(otherWay) === null ? otherWay : before.otherWay,
+    conditions: faultInConditions(conditions) === null ? conditions : before.conditions,
   }
 }
 

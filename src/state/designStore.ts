@@ -1,5 +1,14 @@
 import { createStore, type StoreApi } from 'zustand/vanilla'
-import type { Design, Knot, Stage } from '../core'
+import {
+  type Design,
+  designWithLamp,
+  detailsOf,
+  type Knot,
+  type LampDetails,
+  type LampRecord,
+  lampTurned,
+  type Stage,
+} from '../core'
 import { constrainDesign, problemWithKnots } from './constrain'
 import { freshDesign } from './fresh'
 import { begin, cancel, commit, type History, record, redo, startHistory, undo } from './history'
@@ -7,7 +16,11 @@ import { dropKnot, insertKnot, moveKnot } from './knots'
 import { sameData, shareUnchanged } from './shareUnchanged'
 
 /** New values for some parts of a stage, and for the texts around it. */
-export type DesignPatch = Partial<Stage> & Partial<Omit<Design, 'stage'>>
+export type DesignPatch = Partial<Stage> &
+  Partial<Omit<Design, 'stage' | 'lampDetails'>> & {
+    /** Parts of what is known of the lamp besides. */
+    readonly lampDetails?: Partial<LampDetails>
+  }
 
 /** The design on the page, how it came to be, and all that can be done to it. */
 export type DesignState = {
@@ -27,6 +40,10 @@ export type DesignState = {
   readonly addKnot: (index: number) => void
   readonly removeKnot: (index: number) => void
   readonly rename: (title: string) => void
+  /** Puts another lamp into the design. */
+  readonly fitLamp: (record: LampRecord) => void
+  /** Turns a lamp that differs by polarity round in its holder. */
+  readonly turnLamp: () => void
 
   readonly beginDrag: () => void
   readonly endDrag: () => void
@@ -72,7 +89,7 @@ export function createDesignStore(first: Design = freshDesign): StoreApi<DesignS
     return {
       ...fromHistory(startHistory(first)),
       notice: null,
-      change: ({ title, note, lampName, ...stage }) => {
+      change: ({ title, note, lampName, lampDetails, ...stage }) => {
         const { design } = get()
         change(
           {
@@ -80,6 +97,9 @@ export function createDesignStore(first: Design = freshDesign): StoreApi<DesignS
             note: note ?? design.note,
             lampName: lampName ?? design.lampName,
             stage: { ...design.stage, ...stage },
+            ...(lampDetails === undefined && design.lampDetails === undefined
+              ? {}
+              : { lampDetails: { ...detailsOf(design), ...lampDetails } }),
           },
           stage.lamp ? problemWithKnots(stage.lamp.knots) : null,
         )
@@ -95,6 +115,12 @@ export function createDesignStore(first: Design = freshDesign): StoreApi<DesignS
         if (removed.ok) changeKnots(removed.knots)
         else set({ notice: removed.message })
       },
+      fitLamp: (record) => {
+        const problem = problemWithKnots(record.knots)
+        if (problem === null) change(designWithLamp(get().design, record))
+        else set({ notice: problem })
+      },
+      turnLamp: () => change(lampTurned(get().design)),
       rename: (title) => change({ ...get().design, title }),
       beginDrag: () => moveOn(begin(toHistory(get()))),
       endDrag: () => moveOn(commit(toHistory(get()), sameData)),

@@ -30,7 +30,7 @@ await build({
     emptyOutDir: true,
     target: 'node20',
     rolldownOptions: {
-      input: { core: source('core'), drag: source('drag') },
+      input: { core: source('core'), fit: source('fit'), drag: source('drag') },
       output: { entryFileNames: '[name].mjs' },
     },
   },
@@ -42,6 +42,9 @@ const bench = (name) => import(pathToFileURL(`${built}${name}.mjs`).href)
 
 console.log('\nThe core')
 await (await bench('core')).run(report)
+
+console.log('\nA fit to a sweep')
+await (await bench('fit')).run(report)
 
 console.log('\nA drag of the load line')
 await (await bench('drag')).run(report)

@@ -1,0 +1,4 @@
+import { expose } from 'comlink'
+import { fitService } from './lampFit'
+
+expose(fitService())
