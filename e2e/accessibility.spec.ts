@@ -109,7 +109,7 @@ test('everything that can be done with the mouse is reached by Tab, in an order 
     /^Supply end of the load line/,
     /^Slope of the load line/,
     /^Knee: voltage/,
-    /^Stop the marker/,
+    /^(Stop|Run) the marker/,
     /^Figures/,
   ]
   let from = 0

@@ -216,7 +216,7 @@ test('every figure has a unit or is a plain word, and explains itself on request
   expect(await figures.count()).toBeGreaterThan(12)
   for (const figure of await figures.all()) {
     const name = (await figure.locator('summary').textContent()) ?? ''
-    expect(await figure.locator('output').textContent(), name).toMatch(
+    expect(await figure.locator('summary strong').textContent(), name).toMatch(
       /^(?:[\d.,]+\s(?:[fpnµmkMGT]?(?:V|A|Ω|F|s|Hz|W|J|C)|min|h)|any|none|–)$/,
     )
     await expect(figure.locator('p')).toBeHidden()

@@ -38,7 +38,6 @@ test('every handle has a name and says its value in words', async ({ page }) => 
 })
 
 test('Tab goes through all handles, and the one it is on can be seen', async ({ page }) => {
-  await page.getByRole('button', { name: 'Stop the marker' }).click()
   await showPlane(page)
   const ids = await handleIds(page)
   const plain = new Map<string, Buffer>()

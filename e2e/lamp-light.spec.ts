@@ -3,6 +3,8 @@ import { solveStage } from '../src/core'
 import { expect, openBench, test } from './support/bench'
 import { designWith, fragmentOf, stageWith } from './support/designs'
 
+test.use({ contextOptions: { reducedMotion: 'no-preference' } })
+
 /** Brightness of the lamp drawn on the page: when, s, and how much, 0 … 1. */
 type Brightness = readonly (readonly [time: number, light: number])[]
 

@@ -203,7 +203,7 @@ const damagedLinks: readonly (readonly [what: string, fragment: string, why: Reg
   ],
   ['that is no base64', good.replace(/.{6}$/, '!*()$;'), /damaged/],
   ['with nothing in it', '#1..', /damaged/],
-  ['made by a newer version', sealed('{}', 2), /newer Glowloop: format 2/],
+  ['made by a newer version', sealed('{}', 3), /newer Glowloop: format 3/],
   ['too long', `${good}${'A'.repeat(longestFragment)}`, /too long/],
   ['that unpacks to megabytes', sealed(`"${'x'.repeat(1_000_000)}"`), /unpacks to far more/],
   ['that is plain text', '#the-quick-brown-fox', /not a design/],

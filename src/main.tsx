@@ -1,6 +1,7 @@
 import { StrictMode } from 'react'
 import { createRoot } from 'react-dom/client'
 import { App } from './panels/App'
+import { loadPanels } from './panels/panelList'
 import { startSharing } from './panels/startSharing'
 import { designStore } from './state/useDesign'
 import { look } from './state/viewStore'
@@ -16,6 +17,7 @@ import './style/theme.css'
 import './style/page.css'
 import './style/plate.css'
 import './style/controls.css'
+import './style/lamp.css'
 
 if (window.matchMedia('(prefers-reduced-motion: reduce)').matches) look({ running: false })
 
@@ -35,4 +37,8 @@ void startSharing()
       .getState()
       .say('Links and files cannot be opened or saved: part of this page did not load. Reload it.'),
   )
-  .finally(draw)
+  .finally(() => {
+    draw()
+    // What is opened later is fetched now that the page stands: it then needs no network.
+    window.setTimeout(() => void loadPanels().catch(() => undefined), 700)
+  })

@@ -33,7 +33,11 @@ export const test = base.extend<Fixtures>({
     const contexts: BrowserContext[] = []
     const faults: (readonly string[])[] = []
     await use(async (options = {}) => {
-      const context = await browser.newContext({ baseURL: baseURL!, ...options })
+      const context = await browser.newContext({
+        baseURL: baseURL!,
+        reducedMotion: 'reduce',
+        ...options,
+      })
       contexts.push(context)
       faults.push(watch(context, baseURL!))
       return context.newPage()

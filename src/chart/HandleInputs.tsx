@@ -76,6 +76,9 @@ function slidersOf(stage: Stage): Slider[] {
   return sliders
 }
 
+/** A stage whose lamp has nothing to move. */
+const withoutKnots = (stage: Stage): Stage => ({ ...stage, lamp: { ...stage.lamp, knots: [] } })
+
 const arrows: Readonly<Record<string, { along: Step['along'] | null; up: boolean; page?: true }>> =
   {
     ArrowUp: { along: 'voltage', up: true },
@@ -92,6 +95,7 @@ const arrows: Readonly<Record<string, { along: Step['along'] | null; up: boolean
  */
 export function HandleInputs(props: {
   stage: Stage
+  knotsFixed: boolean
   onSelect: (id: HandleId | null) => void
   onEdit: (edit: Edit) => void
   onStep: (id: HandleId, step: Step) => void
@@ -111,7 +115,7 @@ export function HandleInputs(props: {
   return (
     <fieldset className="handle-inputs">
       <legend>Handles of the plane</legend>
-      {slidersOf(stage).map((slider) => (
+      {slidersOf(props.knotsFixed ? withoutKnots(stage) : stage).map((slider) => (
         <input
           key={`${slider.id}-${slider.along}`}
           type="range"

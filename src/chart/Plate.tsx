@@ -17,22 +17,27 @@ import {
   type Edit,
   type HandleId,
   handlesOf,
+  knotOf,
+  lineThrough,
   type PartChoice,
   placeHandle,
   type Step,
-  seriesThrough,
   stepHandle,
 } from './handles'
 import { LevelLines } from './LevelLines'
+import { litWithin } from './litWithin'
+import type { Overlay } from './overlayPaths'
 import { PlaneDrawing } from './PlaneDrawing'
 import { planeLabels } from './planeLabels'
 import { planePicture } from './planePicture'
 import { type Box, bottomOf, plateLayout } from './plateLayout'
+import { ReadingsDrawing } from './ReadingsDrawing'
 import { TraceDrawing } from './TraceDrawing'
 import { tickWriter } from './tickText'
 import type { Trace } from './traceOf'
 import { highestCurrent, tracePicture } from './tracePicture'
 import { type Point, useGrab } from './useGrab'
+import { useGrabbableByTouch } from './useGrabbableByTouch'
 import { type PanZoom, usePanZoom } from './usePanZoom'
 import { type Playing, usePlayback } from './usePlayback'
 import { useWidth } from './useWidth'
@@ -70,6 +75,10 @@ export function Plate(props: {
   span: Span
   zoom: Zoom
   choice: PartChoice
+  /** The characteristic is not the one entered: its knots are not for moving. */
+  knotsFixed: boolean
+  /** Readings and a fit to show on the plane; null of none. */
+  overlay: Overlay | null
   selected: HandleId | null
   /** When true, the next click on the plane puts the selected handle there. */
   placing: boolean
@@ -89,9 +98,13 @@ export function Plate(props: {
   const width = useWidth(holder, 1060)
   const layout = useMemo(() => plateLayout(width), [width])
   // While something is dragged the axes stand still under the pointer.
-  const [held, setHeld] = useState<{ x: Domain; y: Domain; time: Domain; amps: Domain } | null>(
-    null,
-  )
+  const [held, setHeld] = useState<{
+    id: HandleId
+    x: Domain
+    y: Domain
+    time: Domain
+    amps: Domain
+  } | null>(null)
 
   const path = useMemo(
     () => branchesOf(stage.lamp.knots, stage.leadResistance),
@@ -123,7 +136,12 @@ export function Plate(props: {
     [trace, time, traceY, current],
   )
   const setting = useMemo(() => ({ stage, path, x, y, choice }), [stage, path, x, y, choice])
-  const handles = useMemo(() => handlesOf(setting), [setting])
+  const { knotsFixed } = props
+  const dragged = held?.id ?? null
+  const handles = useMemo(
+    () => handlesOf(setting, dragged).filter((handle) => !knotsFixed || knotOf(handle.id) < 0),
+    [setting, dragged, knotsFixed],
+  )
 
   const planeDot = useRef<SVGGElement>(null)
   const traceDot = useRef<SVGGElement>(null)
@@ -150,7 +168,7 @@ export function Plate(props: {
     put(planeDot.current, layout.plane, x.place(moment.lampCurrent), y.place(moment.voltage))
     put(traceDot.current, layout.trace, time.place(now), traceY.place(moment.voltage))
     put(currentDot.current, layout.current, time.place(now), current.place(moment.lampCurrent))
-    actions.onTick(now, elapsed, moment.lit)
+    actions.onTick(now, elapsed, litWithin(trace, now, elapsed))
   }
   usePlayback(trace, playing, props.cursor, draw)
 
@@ -164,13 +182,16 @@ export function Plate(props: {
     },
     [actions],
   )
-  const hold = () => setHeld({ x: x.domain, y: y.domain, time: time.domain, amps: current.domain })
+  const hold = (id: HandleId) =>
+    setHeld({ id, x: x.domain, y: y.domain, time: time.domain, amps: current.domain })
   const drag = (event: PointerEvent<SVGElement>, move: (at: Point) => void, id: HandleId) => {
+    // The keyboard goes to the handle's range, which the press itself would take away again.
+    event.preventDefault()
     actions.onSelect(id)
     focusRange(holder.current, id)
     grab(event, svg.current, {
       onStart: () => {
-        hold()
+        hold(id)
         actions.onDragStart()
       },
       onMove: move,
@@ -205,9 +226,7 @@ export function Plate(props: {
     drag(
       event,
       (at) => {
-        const { stage: present, x: across, y: up, choice: kept } = latest.current
-        const through = Math.max(across.range[0] + 0.5, Math.min(across.range[1], at.x))
-        const edit = seriesThrough(present, up.value(at.y), across.value(through), kept)
+        const edit = lineThrough(latest.current, at)
         if (edit !== null) actions.onEdit(edit)
       },
       'slope',
@@ -229,7 +248,10 @@ export function Plate(props: {
       }),
     onTap: (at) => {
       if (!placing || selected === null) return
-      put(selected, at)
+      // A click names a point the load line is to pass through, not only how far along its handle lies.
+      const edit =
+        selected === 'slope' ? lineThrough(setting, at) : placeHandle(setting, selected, at)
+      if (edit !== null) actions.onEdit(edit)
       actions.onPlaced()
     },
   }
@@ -239,6 +261,7 @@ export function Plate(props: {
       actions.onZoom({ ...zoom, time: magnify(time, 'linear', time.value(about.x), factor) }),
     onTap: () => {},
   }
+  useGrabbableByTouch(svg)
   const planeHands = usePanZoom(svg, planeGround, planeGestures)
   const traceHands = usePanZoom(svg, traceGround, traceGestures)
   const { plane } = layout
@@ -286,6 +309,7 @@ export function Plate(props: {
           />
         )}
         <PlaneDrawing input={input} picture={picture} labels={labels} box={plane} />
+        {props.overlay !== null && <ReadingsDrawing input={input} overlay={props.overlay} />}
         <TraceDrawing
           picture={waves}
           time={time}
@@ -325,6 +349,7 @@ export function Plate(props: {
       </svg>
       <HandleInputs
         stage={stage}
+        knotsFixed={knotsFixed}
         onSelect={actions.onSelect}
         onEdit={actions.onEdit}
         onStep={(id: HandleId, step: Step) => {

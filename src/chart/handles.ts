@@ -59,8 +59,14 @@ export function knotName(knots: readonly Knot[], index: number): string {
   return `Knot ${index + 1}`
 }
 
-/** All handles in sight: supply end, slope, and each knot but the first, which stays at nothing. */
-export function handlesOf({ stage, path, x, y }: HandleSetting): Handle[] {
+/**
+ * All handles in sight: supply end, slope, and each knot but the first, which stays at nothing. One being
+ * dragged stays in sight at the edge, wherever it has gone.
+ */
+export function handlesOf(
+  { stage, path, x, y }: HandleSetting,
+  dragged: HandleId | null = null,
+): Handle[] {
   const line = loadLineOf(stage)
   const slope = slopeHandle(line, x, y)
   const handles: Handle[] = [
@@ -84,10 +90,15 @@ export function handlesOf({ stage, path, x, y }: HandleSetting): Handle[] {
   }
   const [left, right] = x.range
   const [floor, top] = y.range
-  return handles.filter(
-    (handle) =>
-      handle.x >= left - 1 && handle.x <= right + 1 && handle.y <= floor + 1 && handle.y >= top - 1,
-  )
+  return handles.flatMap((handle) => {
+    if (handle.id === dragged) {
+      const held = (at: number, low: number, high: number) => Math.max(low, Math.min(high, at))
+      return { ...handle, x: held(handle.x, left, right), y: held(handle.y, top, floor) }
+    }
+    const seen =
+      handle.x >= left - 1 && handle.x <= right + 1 && handle.y <= floor + 1 && handle.y >= top - 1
+    return seen ? handle : []
+  })
 }
 
 /** Rounds to the nearest 1, 2 or 5 of a power of ten that is no more than `step`. */
@@ -158,6 +169,15 @@ export function seriesThrough(
   const resistance =
     choice === 'any' ? toFiguresWithin(kept, step) : (nearestPreferred(kept, choice) ?? kept)
   return { kind: 'series', resistance }
+}
+
+/** The series resistance that takes the load line through a place on the plane, px. */
+export function lineThrough(
+  { stage, x, y, choice }: HandleSetting,
+  at: { readonly x: number; readonly y: number },
+): Edit | null {
+  const across = Math.max(x.range[0] + 0.5, Math.min(x.range[1], at.x))
+  return seriesThrough(stage, y.value(at.y), x.value(across), choice, x.value(across + 1))
 }
 
 /** One key press: along the voltage axis or the current axis, a fine step or a coarse one. */

@@ -31,3 +31,21 @@ export function shownBrightness(
   const left = before * Math.exp(-elapsed / fadeTime)
   return left < 0.01 ? 0 : left
 }
+
+/** Rise in brightness that counts as a flash: a tenth and more of full brightness [WCAG, general flash]. */
+const leastFlash = 0.1
+
+/** Whether going from one brightness to another is the beginning of a flash. */
+export function isRise(before: number, next: number): boolean {
+  return next - before >= leastFlash
+}
+
+/**
+ * The brightness wanted, unless that would begin another flash too soon: then the one before. Whatever a hand on
+ * the load line does, no second holds more than three.
+ *
+ * @param sinceRise s since the last flash began.
+ */
+export function heldBack(before: number, wanted: number, sinceRise: number): number {
+  return isRise(before, wanted) && sinceRise < 1 / mostShown ? before : wanted
+}

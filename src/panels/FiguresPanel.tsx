@@ -22,7 +22,7 @@ export function FiguresPanel() {
             <details key={row.name}>
               <summary>
                 <span>{row.name}</span>
-                <output>{row.value}</output>
+                <strong>{row.value}</strong>
               </summary>
               <p>{row.meaning}</p>
             </details>

@@ -1,5 +1,6 @@
 import { Suspense } from 'react'
 import { look, useView } from '../state/viewStore'
+import { PanelGuard } from './PanelGuard'
 import { panelList } from './panelList'
 
 /** One panel open below the plate, chosen from the row above it. */
@@ -21,9 +22,11 @@ export function LowerPanels() {
           </button>
         ))}
       </nav>
-      <Suspense fallback={<p className="nothing">Opening …</p>}>
-        <panel.Body />
-      </Suspense>
+      <PanelGuard key={panel.id}>
+        <Suspense fallback={<p className="nothing">Opening …</p>}>
+          <panel.Body />
+        </Suspense>
+      </PanelGuard>
     </section>
   )
 }

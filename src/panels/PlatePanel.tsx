@@ -1,8 +1,9 @@
 import { type RefObject, useMemo, useRef } from 'react'
-import { shownBrightness } from '../chart/lampLight'
+import { heldBack, isRise, shownBrightness } from '../chart/lampLight'
 import { Plate, type PlateActions, wholeView } from '../chart/Plate'
 import { traceOf } from '../chart/traceOf'
 import { formatQuantity } from '../core'
+import { useReadings } from '../state/readingsStore'
 import { designStore } from '../state/useDesign'
 import { look, useView, viewStore } from '../state/viewStore'
 import { HandleBar } from './HandleBar'
@@ -15,8 +16,9 @@ import { zoomPlane, zoomTime } from './zooming'
 
 /** The picture: plane and trace, and what goes with them. */
 export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
-  const { stage, solution } = useSolution()
+  const { stage, solution, shifted } = useSolution()
   const view = useView((state) => state)
+  const overlay = useReadings((state) => state.sweepShown)
   const { span } = view
   const trace = useMemo(() => traceOf(stage, solution, span), [stage, solution, span])
   const period = solution.cycle?.period ?? null
@@ -24,6 +26,7 @@ export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
   const clock = useRef<HTMLOutputElement>(null)
   const now = useRef(0)
   const brightness = useRef(0)
+  const risenAt = useRef(Number.NEGATIVE_INFINITY)
 
   const light = useRef({ speed, period })
   light.current = { speed, period }
@@ -44,12 +47,15 @@ export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
       onTick: (time, elapsed, lit) => {
         now.current = time
         const shown = light.current
-        const rate = shown.period === null || elapsed === 0 ? 0 : shown.speed / shown.period
-        brightness.current = viewStore.getState().running
+        const running = viewStore.getState().running
+        const rate = shown.period === null || !running ? 0 : shown.speed / shown.period
+        const wanted = running
           ? shownBrightness(brightness.current, lit, elapsed / shown.speed, rate)
-          : lit
-            ? 1
-            : 0
+          : Number(lit)
+        const since = (performance.now() - risenAt.current) / 1000
+        const next = heldBack(brightness.current, wanted, since)
+        if (isRise(brightness.current, next)) risenAt.current = performance.now()
+        brightness.current = next
         if (glow.current !== null) glow.current.style.opacity = brightness.current.toFixed(2)
         if (clock.current !== null) {
           clock.current.textContent = formatQuantity(time, 's', { figures: 3, keepZeros: true })
@@ -116,6 +122,8 @@ export function PlatePanel({ glow }: { glow: RefObject<SVGGElement | null> }) {
         span={span}
         zoom={view.zoom ?? wholeView}
         choice={view.choice}
+        knotsFixed={shifted}
+        overlay={overlay}
         selected={view.selected}
         placing={view.placing}
         playing={{ running: view.running, speed }}

@@ -5,6 +5,7 @@ import { designLimits, textLimits } from '../io/designLimits'
 import { designStore, useDesign } from '../state/useDesign'
 import { look, useView } from '../state/viewStore'
 import { Choice } from './parts/Choice'
+import { SeriesField, SupplyField } from './parts/PartFields'
 import { QuantityField } from './parts/QuantityField'
 
 const infinity = Number.POSITIVE_INFINITY
@@ -17,8 +18,6 @@ export function StagePanel() {
   const choice = useView((view) => view.choice)
   const panel = useRef<HTMLElement>(null)
   const { change } = designStore.getState()
-  const ohmStep = (value: number, least: number) => (direction: 'up' | 'down', coarse: boolean) =>
-    steppedPart(value > 0 ? value : least, choice, { direction, coarse }, least, 1e13)
   return (
     <section className="stage-panel" ref={panel} aria-labelledby="stage-title">
       <h2 className="small-title" id="stage-title">
@@ -32,18 +31,7 @@ export function StagePanel() {
         }
       />
       <div className="fields">
-        <QuantityField
-          label="Supply"
-          unit="V"
-          part="supplyVoltage"
-          value={stage.supplyVoltage}
-          max={designLimits.supplyVoltage.most}
-          onValue={(supplyVoltage) => change({ supplyVoltage })}
-          step={(direction, coarse) =>
-            Math.max(0, stage.supplyVoltage + (direction === 'up' ? 1 : -1) * (coarse ? 10 : 1))
-          }
-          hint="open-circuit voltage"
-        />
+        <SupplyField part="supplyVoltage" hint="open-circuit voltage" />
         <QuantityField
           label="Source resistance"
           unit="Ω"
@@ -54,16 +42,7 @@ export function StagePanel() {
           onValue={(sourceResistance) => change({ sourceResistance })}
           hint="the supply’s own"
         />
-        <QuantityField
-          label="Series resistor"
-          unit="Ω"
-          part="seriesResistance"
-          value={stage.seriesResistance}
-          max={designLimits.seriesResistance.most}
-          onValue={(seriesResistance) => change({ seriesResistance })}
-          step={ohmStep(stage.seriesResistance, 1)}
-          hint="sets the load line"
-        />
+        <SeriesField part="seriesResistance" hint="sets the load line" />
         <QuantityField
           label="Capacitor"
           unit="F"

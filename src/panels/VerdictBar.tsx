@@ -7,7 +7,7 @@ import { verdictWords } from './words/verdictWords'
 
 /** The verdict in one sentence, readable at arm's length, and the cautions that go with the stage. */
 export function VerdictBar({ glow }: { glow: Ref<SVGGElement> }) {
-  const { stage, solution } = useSolution()
+  const { stage, solution, sentences, fault } = useSolution()
   const words = useMemo(() => verdictWords(stage, solution), [stage, solution])
   const cautions = useMemo(() => cautionsFor(stage), [stage])
   return (
@@ -20,6 +20,11 @@ export function VerdictBar({ glow }: { glow: Ref<SVGGElement> }) {
             {words.sentence}
           </h2>
           <p className="advice">{words.advice}</p>
+          {(sentences.length > 0 || fault !== null) && (
+            <p className="advice conditions">
+              {fault ?? `Under the conditions set: ${sentences.join(' ')}`}
+            </p>
+          )}
         </div>
       </div>
       {cautions.length > 0 && (

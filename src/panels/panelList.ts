@@ -9,8 +9,15 @@ export type Panel = {
   readonly Body: ComponentType
 }
 
+const loadLamp = () => import('./lamp/LampPanel')
+
+/** Loads what is not there yet, so that the page goes on working without a network. */
+export async function loadPanels(): Promise<void> {
+  await Promise.all([loadLamp().then(({ prepare }) => prepare())])
+}
+
 /** The panels, in the order they are shown. */
 export const panelList: readonly Panel[] = [
   { id: 'figures', name: 'Figures', Body: FiguresPanel },
-  { id: 'lamp', name: 'Lamp', Body: lazy(() => import('./LampFigures')) },
+  { id: 'lamp', name: 'Lamp', Body: lazy(loadLamp) },
 ]

@@ -4,6 +4,7 @@ import { keepDesign, lazyStore, restoreDesign } from '../io/localKeep'
 import type { Opened } from '../io/opened'
 import { designStore } from '../state/useDesign'
 import { look } from '../state/viewStore'
+import { saveText } from './saveText'
 
 const store = lazyStore(() => window.localStorage)
 
@@ -65,15 +66,10 @@ export function saveFile(): void {
     say(written.message)
     return
   }
-  const address = URL.createObjectURL(new Blob([written.text], { type: 'application/json' }))
-  const anchor = document.createElement('a')
-  anchor.href = address
-  anchor.download = fileNameFor(design)
-  anchor.click()
-  window.setTimeout(() => URL.revokeObjectURL(address), 10_000)
+  saveText(fileNameFor(design), written.text, 'application/json')
 }
 
-const mostBytes = 4_000_000
+const mostBytes = 32_000_000
 const mostShown = 20_000
 
 /** Opens a saved design; what cannot be read is reported and changes nothing. */

@@ -30,7 +30,7 @@ function mayHoldDesign(): boolean {
 export async function startSharing(): Promise<void> {
   listen()
   if (mayHoldDesign()) (await sharing()).openFirst()
-  else window.setTimeout(() => void sharing(), 1000)
+  else window.setTimeout(() => void sharing(), 700)
 }
 
 function listen(): void {

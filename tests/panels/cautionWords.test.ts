@@ -32,9 +32,9 @@ describe('cautionWords', () => {
     expect(charge.source).toContain('IEC 60335-1')
   })
 
-  it('says that a dark lamp leaves up to the strike voltage on the capacitor', () => {
+  it('says that a dark lamp leaves up to all the supply gives on the capacitor', () => {
     const dark = wordsFor(stageOf()).find(({ kind }) => kind === 'dark is not discharged')!
-    expect(dark.text).toContain('up to 75 V may still be on it')
+    expect(dark.text).toContain('up to 120 V may still be on it')
   })
 
   it('says nothing of a stage that is safe to touch', () => {

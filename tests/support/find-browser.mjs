@@ -15,6 +15,7 @@ const quietFlags = [
   '--disable-background-networking',
   '--disable-component-update',
   '--disable-sync',
+  '--disable-gpu',
 ]
 
 /**

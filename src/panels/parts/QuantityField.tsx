@@ -19,6 +19,8 @@ export function QuantityField(props: {
   part?: string | undefined
   /** The label is there for screen readers only. */
   quiet?: boolean | undefined
+  /** Not part of the design: nothing to undo. */
+  apart?: boolean | undefined
 }) {
   const { label, unit, value, onValue, none, min, max, hint, step, part, quiet } = props
   const id = useId()
@@ -40,14 +42,20 @@ export function QuantityField(props: {
   }, [value])
 
   const type = (text: string) => {
-    if (!designStore.getState().dragging) designStore.getState().beginDrag()
     setDraft(text)
     const typed = parseQuantity(text, unit, options)
-    if (typed.ok) onValue(typed.value)
+    const { dragging, beginDrag, cancelDrag } = designStore.getState()
+    if (!typed.ok) {
+      // What was read of it so far was never meant: back to what was there before.
+      if (!props.apart && dragging) cancelDrag()
+      return
+    }
+    if (!props.apart && !dragging) beginDrag()
+    onValue(typed.value)
   }
   const settle = () => {
     if (draft === null) return
-    designStore.getState().endDrag()
+    if (!props.apart) designStore.getState().endDrag()
     // What could not be read stays on screen, with the reason.
     if (read?.ok) setDraft(null)
   }
@@ -55,7 +63,7 @@ export function QuantityField(props: {
     if (event.key === 'Enter') settle()
     if (event.key === 'Escape' && draft !== null) {
       event.stopPropagation()
-      designStore.getState().cancelDrag()
+      if (!props.apart) designStore.getState().cancelDrag()
       setDraft(null)
     }
     const up = event.key === 'ArrowUp' || event.key === 'PageUp'

@@ -1,12 +1,15 @@
-import { knotName, steppedPart } from '../chart/handles'
-import { designLimits } from '../io/designLimits'
-import { designStore, useDesign } from '../state/useDesign'
-import { QuantityField } from './parts/QuantityField'
+import { knotName } from '../../chart/handles'
+import { detailsOf, type Knot } from '../../core'
+import { designLimits } from '../../io/designLimits'
+import { designStore, useDesign } from '../../state/useDesign'
+import { KnotCurrent, KnotVoltage } from '../parts/KnotFields'
+import { QuantityField } from '../parts/QuantityField'
 
 /** The lamp by its figures: each knot of the characteristic, and its two times. */
-export default function LampFigures() {
+export function KnotsPart() {
   const lamp = useDesign((state) => state.design.stage.lamp)
   const lampName = useDesign((state) => state.design.lampName)
+  const details = useDesign((state) => detailsOf(state.design))
   const { change, changeKnot, addKnot, removeKnot } = designStore.getState()
   return (
     <div className="lamp-figures">
@@ -27,6 +30,7 @@ export default function LampFigures() {
             {lamp.knots.map((knot, index) => {
               const name = index === 0 ? 'Origin' : knotName(lamp.knots, index)
               const place = `knot-${index}`
+              const onKnot = (moved: Knot) => changeKnot(index, moved)
               return (
                 <tr key={place}>
                   <th scope="row">{name}</th>
@@ -38,33 +42,10 @@ export default function LampFigures() {
                   ) : (
                     <>
                       <td>
-                        <QuantityField
-                          label={`${name}: voltage`}
-                          quiet
-                          unit="V"
-                          value={knot.voltage}
-                          max={designLimits.voltage.most}
-                          onValue={(voltage) => changeKnot(index, { ...knot, voltage })}
-                          step={(direction, coarse) =>
-                            Math.max(
-                              0,
-                              knot.voltage + (direction === 'up' ? 1 : -1) * (coarse ? 5 : 0.5),
-                            )
-                          }
-                        />
+                        <KnotVoltage name={name} knot={knot} onKnot={onKnot} />
                       </td>
                       <td>
-                        <QuantityField
-                          label={`${name}: current`}
-                          quiet
-                          unit="A"
-                          value={knot.current}
-                          max={designLimits.current.most}
-                          onValue={(current) => changeKnot(index, { ...knot, current })}
-                          step={(direction, coarse) =>
-                            steppedPart(knot.current, 'any', { direction, coarse }, 1e-15, 100)
-                          }
-                        />
+                        <KnotCurrent name={name} knot={knot} onKnot={onKnot} />
                       </td>
                     </>
                   )}
@@ -114,6 +95,16 @@ export default function LampFigures() {
           <p className="hint">what you call it</p>
         </div>
         <QuantityField
+          label="Resistor in its base"
+          unit="Ω"
+          value={details.baseResistance}
+          max={designLimits.baseResistance.most}
+          none={{ value: 0, word: 'none' }}
+          onValue={(baseResistance) => change({ lampDetails: { baseResistance } })}
+          hint="built in; adds to the lead resistor"
+        />
+        <PolarityButtons />
+        <QuantityField
           label="Recovery time"
           unit="s"
           value={lamp.recoveryTime}
@@ -132,6 +123,47 @@ export default function LampFigures() {
           hint="mean of the random wait before each strike; longer in the dark, up to seconds (from memory)"
         />
       </section>
+    </div>
+  )
+}
+
+/** A lamp that differs by polarity carries two characteristics, one in use. */
+function PolarityButtons() {
+  const otherWay = useDesign((state) => detailsOf(state.design).otherWay)
+  const knots = useDesign((state) => state.design.stage.lamp.knots)
+  const { change, turnLamp } = designStore.getState()
+  return (
+    <div className="field">
+      <span className="field-name">The other way round</span>
+      <div className="button-row">
+        {otherWay === null ? (
+          <button
+            type="button"
+            className="button"
+            onClick={() => change({ lampDetails: { otherWay: knots } })}
+          >
+            It differs: give it a second curve
+          </button>
+        ) : (
+          <>
+            <button type="button" className="button" onClick={turnLamp}>
+              Turn it round
+            </button>
+            <button
+              type="button"
+              className="button"
+              onClick={() => change({ lampDetails: { otherWay: null } })}
+            >
+              Same both ways
+            </button>
+          </>
+        )}
+      </div>
+      <p className="hint">
+        {otherWay === null
+          ? 'taken to be the same'
+          : 'two curves: turn the lamp to see and edit the other'}
+      </p>
     </div>
   )
 }
