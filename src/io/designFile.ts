@@ -3,7 +3,7 @@ import { checkDesign, decodeDesign, encodeDesign } from './designFormat'
 import { type Opened, type Refused, refused } from './opened'
 
 const program = 'Glowloop'
-const mostCharacters = 16_000_000
+const mostCharacters = 2_000_000
 const longestName = 50
 const ending = '.glowloop.json'
 

@@ -134,9 +134,15 @@ function LinkMenu() {
             <button type="button" className="button strong" onClick={copy}>
               {copied ? 'Copied' : 'Copy the link'}
             </button>
+            {shared.leftOut !== null && (
+              <p>
+                <strong>Too long for a link: {shared.leftOut} stay behind.</strong> Save a file to
+                send them too.
+              </p>
+            )}
             <p className="hint">
-              The whole design is in the link itself: {shared.link.length} characters. Nothing is
-              sent anywhere.
+              {shared.leftOut === null ? 'The whole design' : 'All else'} is in the link itself:{' '}
+              {shared.link.length} characters. Nothing is sent anywhere.
             </p>
           </>
         )}

@@ -48,14 +48,20 @@ export function keep(): void {
 
 /** What comes of making a link. */
 export type Shared =
-  | { readonly ok: true; readonly link: string }
+  | {
+      readonly ok: true
+      readonly link: string
+      /** What does not fit into a link and stays behind, in words; null of nothing. */
+      readonly leftOut: string | null
+    }
   | { readonly ok: false; readonly message: string }
 
 /** The link to this design, or a sentence that says why there is none. */
 export function shareLink(): Shared {
   const link = linkFragment(designStore.getState().design)
   if (!link.ok) return link
-  return { ok: true, link: `${window.location.href.replace(/#.*$/, '')}${link.fragment}` }
+  const page = window.location.href.replace(/#.*$/, '')
+  return { ok: true, link: `${page}${link.fragment}`, leftOut: link.leftOut }
 }
 
 /** Saves the design as a file. */
@@ -69,7 +75,7 @@ export function saveFile(): void {
   saveText(fileNameFor(design), written.text, 'application/json')
 }
 
-const mostBytes = 32_000_000
+const mostBytes = 4_000_000
 const mostShown = 20_000
 
 /** Opens a saved design; what cannot be read is reported and changes nothing. */

@@ -9,7 +9,7 @@ export function useUndoKeys(): void {
       const target = event.target
       if (
         target instanceof HTMLElement &&
-        target.matches('[data-typing], .title, #lamp-name, #design-note')
+        target.matches('[data-typing], .title, #lamp-name, #design-note, #lamp-note')
       )
         return
       const key = event.key.toLowerCase()

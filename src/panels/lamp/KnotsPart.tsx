@@ -94,6 +94,18 @@ export function KnotsPart() {
           />
           <p className="hint">what you call it</p>
         </div>
+        <div className="field">
+          <label htmlFor="lamp-note">Note about the lamp</label>
+          <textarea
+            id="lamp-note"
+            rows={2}
+            maxLength={400}
+            value={details.note}
+            onFocus={() => designStore.getState().beginDrag()}
+            onBlur={() => designStore.getState().endDrag()}
+            onChange={(event) => change({ lampDetails: { note: event.currentTarget.value } })}
+          />
+        </div>
         <QuantityField
           label="Resistor in its base"
           unit="Ω"
