@@ -33,8 +33,12 @@ export function useMyLamps<T>(select: (state: MyLamps) => T): T {
 /** What can be done with one's own lamps, each step kept in `store` and shown at once. */
 export function lampKeeper(store: LampStore, newId: () => string) {
   const { setState, getState } = myLampsStore
+  let asked = 0
   const refresh = async (): Promise<void> => {
+    const own = ++asked
     const list = await store.list()
+    // An answer overtaken by a later question is out of date.
+    if (own !== asked) return
     if (list.ok) setState({ lamps: list.lamps, damaged: list.damaged, read: true })
     else setState({ trouble: list.message, read: true })
   }

@@ -55,6 +55,23 @@ describe('one’s own lamps', () => {
     expect(myLampsStore.getState().trouble).toContain('storage is full')
   })
 
+  it('are not put back to what they were by an answer that comes late', async () => {
+    const store = memoryLampStore()
+    const empty = await store.list()
+    const waiting: ((list: typeof empty) => void)[] = []
+    let calls = 0
+    const slow: LampStore = {
+      ...store,
+      list: () => (++calls === 1 ? new Promise((resolve) => waiting.push(resolve)) : store.list()),
+    }
+    const keeper = lampKeeper(slow, newId)
+    const first = keeper.refresh()
+    await keeper.keep(lamp)
+    waiting[0]?.(empty)
+    await first
+    expect(names()).toEqual([lamp.name])
+  })
+
   it('say why where they cannot be read', async () => {
     const blocked: LampStore = {
       ...memoryLampStore(),
