@@ -2,6 +2,7 @@ import { useRef, useState } from 'react'
 import { examples } from '../state/examples'
 import { designStore, useDesign } from '../state/useDesign'
 import { look, type Theme, useView } from '../state/viewStore'
+import { FileButton } from './parts/FileButton'
 import type { Shared } from './sharing'
 import { sharing } from './startSharing'
 
@@ -10,7 +11,6 @@ export function HeaderBar() {
   const title = useDesign((state) => state.design.title)
   const canUndo = useDesign((state) => state.past.length > 0)
   const canRedo = useDesign((state) => state.future.length > 0)
-  const file = useRef<HTMLInputElement>(null)
   const store = designStore.getState()
   return (
     <header className="header">
@@ -34,21 +34,11 @@ export function HeaderBar() {
           Redo
         </button>
         <ExamplesMenu />
-        <button type="button" className="button" onClick={() => file.current?.click()}>
-          Open
-        </button>
-        <input
-          ref={file}
-          className="unseen"
-          type="file"
-          aria-label="Open a saved design"
-          tabIndex={-1}
+        <FileButton
+          words="Open"
+          label="Open a saved design"
           accept=".json,application/json"
-          onChange={(event) => {
-            const chosen = event.currentTarget.files?.[0]
-            event.currentTarget.value = ''
-            if (chosen !== undefined) void sharing().then(({ openFile }) => openFile(chosen))
-          }}
+          onFile={(chosen) => void sharing().then(({ openFile }) => openFile(chosen))}
         />
         <button
           type="button"

@@ -1,8 +1,9 @@
-import { useEffect, useRef, useState } from 'react'
+import { useEffect, useState } from 'react'
 import { formatQuantity, kneeIndexOf, type LampRecord, recordOfDesign } from '../../core'
 import type { KeptLamp } from '../../io/lampStore'
 import { useMyLamps } from '../../state/myLamps'
 import { designStore, useDesign } from '../../state/useDesign'
+import { FileButton } from '../parts/FileButton'
 import { saveText } from '../saveText'
 import { FactList } from './FactList'
 import { keeper, lampsFileText, mergeLampFile } from './ownLamps'
@@ -17,7 +18,6 @@ export function MyLampsPart() {
   const lampName = useDesign((state) => state.design.lampName)
   const [said, setSaid] = useState<string | null>(null)
   const [shown, setShown] = useState<string | null>(null)
-  const file = useRef<HTMLInputElement>(null)
   useEffect(() => void keeper.refresh(), [])
   const chosen = lamps.find(({ id }) => id === shown)
   return (
@@ -64,21 +64,11 @@ export function MyLampsPart() {
           >
             Save all as a file
           </button>
-          <button type="button" className="button" onClick={() => file.current?.click()}>
-            Open a file of lamps
-          </button>
-          <input
-            ref={file}
-            className="unseen"
-            type="file"
-            tabIndex={-1}
-            aria-label="Open a file of lamps"
+          <FileButton
+            words="Open a file of lamps"
+            label="Open a file of lamps"
             accept=".json,application/json"
-            onChange={(event) => {
-              const chosenFile = event.currentTarget.files?.[0]
-              event.currentTarget.value = ''
-              if (chosenFile !== undefined) void mergeLampFile(chosenFile, lamps).then(setSaid)
-            }}
+            onFile={(chosen) => void mergeLampFile(chosen, lamps).then(setSaid)}
           />
         </div>
       </section>

@@ -1,9 +1,10 @@
-import { useEffect, useRef, useState } from 'react'
+import { useEffect, useState } from 'react'
 import { recordOfDesign, recordWithFit } from '../../core'
 import { readSweep, type SweepTable, type SweepTableOptions } from '../../io/sweepTable'
 import { writeSweep } from '../../io/sweepWrite'
 import { noteDown, useReadings } from '../../state/readingsStore'
 import { designStore } from '../../state/useDesign'
+import { FileButton } from '../parts/FileButton'
 import { saveText } from '../saveText'
 import { FitResult } from './FitResult'
 import { SweepPreview } from './SweepPreview'
@@ -21,7 +22,6 @@ export function SweepPart() {
   const [options, setOptions] = useState<SweepTableOptions>({})
   const [table, setTable] = useState<SweepTable | null>(null)
   const [fileName, setFileName] = useState<string | null>(null)
-  const file = useRef<HTMLInputElement>(null)
   const { state, begin, stop, forget } = useSweepFit()
   const setup = setupOf(typedSetup)
 
@@ -85,21 +85,11 @@ export function SweepPart() {
           <p className="hint">A long table: its beginning is shown, all of it is used.</p>
         )}
         <div className="button-row">
-          <button type="button" className="button" onClick={() => file.current?.click()}>
-            Open a file
-          </button>
-          <input
-            ref={file}
-            className="unseen"
-            type="file"
-            tabIndex={-1}
-            aria-label="Open a file of readings"
+          <FileButton
+            words="Open a file"
+            label="Open a file of readings"
             accept=".csv,.tsv,.txt,text/*"
-            onChange={(event) => {
-              const chosen = event.currentTarget.files?.[0]
-              event.currentTarget.value = ''
-              if (chosen !== undefined) void open(chosen)
-            }}
+            onFile={(chosen) => void open(chosen)}
           />
           <button
             type="button"
