@@ -211,3 +211,24 @@ test('own lamps are copied, renamed, removed and brought back, and go through a 
   await expect(elsewhere.getByRole('status').filter({ hasText: '2 lamps added' })).toBeVisible()
   await expect(elsewhere.getByRole('textbox', { name: 'Name of Spare' })).toBeVisible()
 })
+
+test('no part of the lamp’s panel needs sideways scrolling on a phone', async ({ page }) => {
+  await page.setViewportSize({ width: 390, height: 844 })
+  await openBench(page)
+  for (const part of [
+    'Figures',
+    'Catalogue',
+    'From a sweep',
+    'From strike tests',
+    'From a watch',
+    'Recovery time',
+    'Conditions',
+    'My lamps',
+  ]) {
+    await openPart(page, part)
+    const beyond = await page.evaluate(
+      () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+    )
+    expect.soft(beyond, part).toBe(0)
+  }
+})
